@@ -1,0 +1,12 @@
+import type { ReactNode } from 'react';
+import { Text } from './Text';
+
+/** Plain words and numbers get the table's size; drawn content stands as it is. */
+export function CellContent({ children, strong }: { children: ReactNode; strong?: boolean }) {
+  if (typeof children !== 'string' && typeof children !== 'number') return children;
+  return (
+    <Text size="table" weight={strong ? 'semibold' : 'regular'}>
+      {children}
+    </Text>
+  );
+}

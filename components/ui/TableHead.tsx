@@ -1,0 +1,75 @@
+import { Pressable } from 'react-native';
+import { useTheme } from '../theme/ThemeProvider';
+import { fontFamily } from '../theme/typography';
+import { Element } from './Element';
+import type { TableColumn, TableProps, TableSort } from './Table';
+import { Text } from './Text';
+import { VisuallyHidden } from './VisuallyHidden';
+
+interface TableHeadProps<Item> {
+  columns: readonly TableColumn<Item>[];
+  sort?: TableSort;
+  onSort?: TableProps<Item>['onSort'];
+  sticky?: boolean;
+}
+
+/** Heads of the columns over a line in ink. */
+export function TableHead<Item>({ columns, sort, onSort, sticky }: TableHeadProps<Item>) {
+  const { colour } = useTheme();
+  return (
+    <Element as="thead" nativeStyle={{ flexDirection: 'row' }}>
+      <Element as="tr">
+        {columns.map((column, index) => {
+          const sorted = sort?.key === column.key ? sort.direction : undefined;
+          return (
+            <Element
+              key={column.key}
+              as="th"
+              attributes={{ scope: 'col', 'aria-sort': column.sortable ? (sorted ?? 'none') : undefined }}
+              css={{
+                textAlign: column.align === 'end' ? 'right' : 'left',
+                verticalAlign: 'bottom',
+                width: column.width,
+                padding: edgePadding(index, columns.length, 6),
+                fontFamily: fontFamily('sans'),
+                fontWeight: 'normal',
+                boxShadow: `inset 0 -1px 0 ${colour.ink}`,
+                ...(sticky ? { position: 'sticky', top: 0, zIndex: 2, background: colour.ground } : null),
+              }}
+            >
+              <HeadWords column={column} sorted={sorted} onSort={onSort} />
+            </Element>
+          );
+        })}
+      </Element>
+    </Element>
+  );
+}
+
+function HeadWords<Item>({ column, sorted, onSort }: { column: TableColumn<Item>; sorted?: TableSort['direction']; onSort?: TableProps<Item>['onSort'] }) {
+  if (column.headContent) {
+    return (
+      <>
+        <VisuallyHidden>{column.head}</VisuallyHidden>
+        {column.headContent}
+      </>
+    );
+  }
+  const words = (
+    <Text size="secondary" tone={column.tone ?? 'inkSoft'} weight={column.tone || sorted ? 'semibold' : 'regular'}>
+      {column.head}
+      {sorted ? (sorted === 'ascending' ? ' ↑' : ' ↓') : ''}
+    </Text>
+  );
+  if (!column.sortable || !onSort) return words;
+  return (
+    <Pressable role="button" style={{ alignSelf: column.align === 'end' ? 'flex-end' : 'flex-start' }} onPress={() => onSort({ key: column.key, direction: sorted === 'ascending' ? 'descending' : 'ascending' })}>
+      {words}
+    </Pressable>
+  );
+}
+
+/** Cell padding: the outer edges of a table stand flush with the text around it. */
+export function edgePadding(index: number, count: number, vertical: number): string {
+  return `${vertical}px ${index === count - 1 ? 0 : 10}px ${vertical}px ${index === 0 ? 0 : 10}px`;
+}
