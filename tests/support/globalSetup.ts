@@ -91,6 +91,8 @@ async function stopFake(child: ChildProcess): Promise<void> {
 }
 
 export default async function setup(project: TestProject): Promise<() => Promise<void>> {
+  // The client of the object storage announces a later end of Node.js 20 once a process.
+  process.env['AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED'] = 'true';
   const given = process.env['TEST_DATABASE_ADMIN_URL'];
   const cluster = given === undefined ? await openCluster({ home: testCluster, disposable: true }) : undefined;
   const adminUrl = given ?? cluster?.adminUrl ?? '';
