@@ -90,6 +90,7 @@ CREATE TABLE "fit_runs" (
 	"set" text NOT NULL,
 	"version_id" uuid,
 	"reason" text DEFAULT '' NOT NULL,
+	"touches" uuid[] DEFAULT '{}' NOT NULL,
 	"created_at" timestamp (3) with time zone DEFAULT now() NOT NULL,
 	"finished_at" timestamp (3) with time zone,
 	CONSTRAINT "fit_runs_set" CHECK (("fit_runs"."set" = 'working' and "fit_runs"."version_id" is null) or ("fit_runs"."set" = 'version' and "fit_runs"."version_id" is not null))

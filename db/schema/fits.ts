@@ -39,6 +39,8 @@ export const fitRuns = pgTable(
     set: text('set').$type<'working' | 'version'>().notNull(),
     versionId: uuid('version_id').references(() => versions.id),
     reason: text('reason').notNull().default(''),
+    /** Records whose change asked for this run; empty asks for every standing fit. A row without `finishedAt` is a request still to be worked on. */
+    touches: uuid('touches').array().notNull().default(sql`'{}'`),
     createdAt: createdAt(),
     finishedAt: at('finished_at'),
   },

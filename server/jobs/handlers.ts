@@ -1,0 +1,17 @@
+import type { Context } from '../context';
+import { findQueuedMails } from '../../db/queries/notices';
+import { sendQueuedMail } from '../services/sendMail';
+import type { JobHandlers } from './queue';
+
+/** What each job of the queue does; every one may run twice. */
+export function createJobHandlers(context: Context): JobHandlers {
+  return {
+    'send-mail': async ({ mailId }) => sendQueuedMail(context, mailId),
+    'refresh-fits': async () => undefined,
+    'freeze-version': async () => undefined,
+    /** Finds work whose request was committed but never enqueued, because the process died in between. */
+    sweep: async () => {
+      for (const mailId of await findQueuedMails(context.db, 200)) await context.jobs.enqueue('send-mail', { mailId }, mailId);
+    },
+  };
+}
