@@ -1,0 +1,5 @@
+import { NotFoundScreen } from '../components/layout/NotFoundScreen';
+
+export default function NotFound() {
+  return <NotFoundScreen />;
+}

@@ -1,0 +1,5 @@
+import { AppRoot } from '../components/layout/AppRoot';
+
+export default function RootLayout() {
+  return <AppRoot />;
+}
