@@ -57,7 +57,8 @@ export const estimateAnswerSchema = z.object({
   aliquotCv: z.number().nullable(),
   poissonCv: z.number().nullable(),
   dispersion: z.object({ statistic: z.number(), df: z.number().int(), p: z.number() }).nullable(),
-  standardErrorKind: z.enum(['between-aliquots', 'counting']),
+  /** Null where no aliquot is left to count. */
+  standardErrorKind: z.enum(['between-aliquots', 'counting']).nullable(),
   aliquotsForTargetCv: z.number().int().nullable(),
   aliquotsStillNeeded: z.number().int().nullable(),
   checks: z.array(checkResultSchema),

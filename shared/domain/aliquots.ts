@@ -68,7 +68,7 @@ export function poolAliquots(input: SampleInput): PooledAliquots | null {
     standardErrorKind: isBetween ? 'between-aliquots' : 'counting',
     aliquotCv: betweenCv(aliquots.map((aliquot, i) => aliquot.nuclei / (effective[i] ?? NaN))),
     dispersion:
-      k > 1 && sumCount > 0
+      k > 1 && sumCount > 0 && Number.isFinite(statistic)
         ? { statistic, df: k - 1, p: chiSquareUpperTail(statistic, k - 1), lowerTailP: chiSquareLowerTail(statistic, k - 1) }
         : null,
     nucleiCounted: sumCount,

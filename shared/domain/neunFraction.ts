@@ -63,5 +63,6 @@ export function neunHomogeneity(neun: NeunInput): { statistic: number; df: numbe
   if (fields.length < 2 || !fields.every(isPossible) || positive === 0 || positive === total) return null;
   const p = positive / total;
   const statistic = fields.reduce((sum, field) => sum + (field.positive - p * field.total) ** 2 / (field.total * p * (1 - p)), 0);
+  if (!Number.isFinite(statistic)) return null;
   return { statistic, df: fields.length - 1, p: chiSquareUpperTail(statistic, fields.length - 1) };
 }

@@ -3,7 +3,7 @@
  * samples can add what is independent in quadrature and what is shared linearly.
  */
 export interface Quantity {
-  value: number;
+  value: number | null;
   standardError: number | null;
   lower: number | null;
   upper: number | null;
@@ -25,6 +25,9 @@ export interface Uncertain {
   above: number;
   shared: SharedErrors;
 }
+
+/** What is printed where a quantity is undefined: every member null. */
+export const UNDEFINED_QUANTITY: Quantity = { value: null, standardError: null, lower: null, upper: null };
 
 /** The 97.5 % point of the standard normal distribution. */
 export const NORMAL_975 = 1.959963984540054;
@@ -114,9 +117,9 @@ export function addUncertain(members: readonly { quantity: Uncertain; suspension
  * The form in which a quantity leaves: value, standard error and 95 % limits, null where undefined.
  * A lower limit below zero is given as zero, because no count is negative.
  */
-export function toQuantity(quantity: Uncertain): Quantity | null {
-  const value = finiteOrNull(quantity.value);
-  if (value === null) return null;
+export function toQuantity(quantity: Uncertain | null): Quantity {
+  const value = finiteOrNull(quantity?.value);
+  if (quantity === null || value === null) return { ...UNDEFINED_QUANTITY };
   const shared = NORMAL_975 * Math.sqrt(sharedVariance(quantity.shared));
   const lower = finiteOrNull(quantity.value - Math.hypot(quantity.below, shared));
   return {

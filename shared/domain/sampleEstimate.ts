@@ -50,9 +50,9 @@ export function sampleComponents(input: SampleInput): SampleComponents {
   };
 }
 
-/** Counts per milligram of the tissue counted; null where mass or count is missing. */
-export function perMg(counted: Uncertain | null, tissueMassG: number | null): Quantity | null {
-  return counted && tissueMassG ? toQuantity(scaleBy(counted, 1 / (tissueMassG * 1000))) : null;
+/** Counts per milligram of the tissue counted; members null where mass or count is missing. */
+export function perMg(counted: Uncertain | null, tissueMassG: number | null): Quantity {
+  return toQuantity(counted && tissueMassG ? scaleBy(counted, 1 / (tissueMassG * 1000)) : null);
 }
 
 /**
@@ -76,16 +76,15 @@ export function estimateSample(
   const parts = sampleComponents(input);
   const { pooled, fraction, tissueMassG, factor } = parts;
   const total = pooled ? aliquotsForCv(input.targetCv, pooled) : null;
-  const quantityOf = (quantity: Uncertain | null) => quantity && toQuantity(quantity);
   const estimate: Omit<SampleEstimate, 'checks'> = {
     structureMassG: tissueMassG === null ? null : finiteOrNull(tissueMassG * factor),
-    cells: quantityOf(parts.scaled.cells),
-    neurons: quantityOf(parts.scaled.neurons),
-    otherCells: quantityOf(parts.scaled.otherCells),
+    cells: toQuantity(parts.scaled.cells),
+    neurons: toQuantity(parts.scaled.neurons),
+    otherCells: toQuantity(parts.scaled.otherCells),
     cellsPerMg: perMg(parts.counted.cells, tissueMassG),
     neuronsPerMg: perMg(parts.counted.neurons, tissueMassG),
     otherCellsPerMg: perMg(parts.counted.otherCells, tissueMassG),
-    neuronFraction: fraction,
+    neuronFraction: fraction ?? { value: null, lower: null, upper: null, standardError: null, varianceKind: null, fields: 0 },
     aliquotCv: finiteOrNull(pooled?.aliquotCv),
     poissonCv: pooled && pooled.nucleiCounted > 0 ? 1 / Math.sqrt(pooled.nucleiCounted) : null,
     excessCv: pooled ? excessCv(pooled) : null,

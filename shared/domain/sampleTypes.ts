@@ -49,15 +49,25 @@ export interface NeuronFraction {
   fields: number;
 }
 
+export interface UndefinedFraction {
+  value: null;
+  lower: null;
+  upper: null;
+  standardError: null;
+  varianceKind: null;
+  fields: 0;
+}
+
 export interface SampleEstimate {
   structureMassG: number | null;
-  cells: Quantity | null;
-  neurons: Quantity | null;
-  otherCells: Quantity | null;
-  cellsPerMg: Quantity | null;
-  neuronsPerMg: Quantity | null;
-  otherCellsPerMg: Quantity | null;
-  neuronFraction: NeuronFraction | null;
+  cells: Quantity;
+  neurons: Quantity;
+  otherCells: Quantity;
+  cellsPerMg: Quantity;
+  neuronsPerMg: Quantity;
+  otherCellsPerMg: Quantity;
+  /** Members are null where no NeuN count was given. */
+  neuronFraction: NeuronFraction | UndefinedFraction;
   aliquotCv: number | null;
   poissonCv: number | null;
   excessCv: number | null;

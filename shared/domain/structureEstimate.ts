@@ -14,12 +14,12 @@ export interface StructureEstimate {
   structureMassG: number | null;
   /** Mass of what was dissociated, over all animals pooled. */
   tissueMassG: number | null;
-  cells: Quantity | null;
-  neurons: Quantity | null;
-  otherCells: Quantity | null;
-  cellsPerMg: Quantity | null;
-  neuronsPerMg: Quantity | null;
-  otherCellsPerMg: Quantity | null;
+  cells: Quantity;
+  neurons: Quantity;
+  otherCells: Quantity;
+  cellsPerMg: Quantity;
+  neuronsPerMg: Quantity;
+  otherCellsPerMg: Quantity;
   otherToNeuronRatio: number | null;
   /** Whether any sample was scaled up, and by which factors, in order of the samples. */
   scaleUpFactors: number[];
@@ -70,9 +70,9 @@ export function combineSamples(samples: readonly StructureSample[]): StructureEs
   return {
     structureMassG: sumMasses(members.map(({ parts, animals }) => scaledMass(parts, animals))),
     tissueMassG,
-    cells: cells && toQuantity(cells),
-    neurons: neurons && toQuantity(neurons),
-    otherCells: otherCells && toQuantity(otherCells),
+    cells: toQuantity(cells),
+    neurons: toQuantity(neurons),
+    otherCells: toQuantity(otherCells),
     cellsPerMg: perMg(counted('cells'), tissueMassG),
     neuronsPerMg: perMg(counted('neurons'), tissueMassG),
     otherCellsPerMg: perMg(counted('otherCells'), tissueMassG),

@@ -25,42 +25,42 @@ describe('a structure made of samples', () => {
 
   it('adds two counted sides with errors in quadrature', () => {
     const structure = combineSamples([{ input: left, suspensionId: 'a' }, { input: left, suspensionId: 'b' }]);
-    expect(structure.cells?.value).toBe(2e7);
-    expect(structure.cells?.standardError).toBeCloseTo(Math.SQRT2 * 500_000, 4);
+    expect(structure.cells.value).toBe(2e7);
+    expect(structure.cells.standardError).toBeCloseTo(Math.SQRT2 * 500_000, 4);
     expect(structure.structureMassG).toBe(1);
-    expect(structure.cellsPerMg?.value).toBeCloseTo(20_000, 8);
+    expect(structure.cellsPerMg.value).toBeCloseTo(20_000, 8);
   });
 
   it('adds volume errors linearly where samples share a suspension, else in quadrature', () => {
     const input = { ...left, suspensionVolumeSe: 0.5 };
     const shared = combineSamples([{ input, suspensionId: 'a' }, { input, suspensionId: 'a' }]);
     const apart = combineSamples([{ input, suspensionId: 'a' }, { input, suspensionId: 'b' }]);
-    expect(shared.cells?.standardError).toBeCloseTo(Math.sqrt(2 * 500_000 ** 2 + (2 * 500_000) ** 2), 4);
-    expect(apart.cells?.standardError).toBeCloseTo(Math.sqrt(2 * 500_000 ** 2 + 2 * 500_000 ** 2), 4);
+    expect(shared.cells.standardError).toBeCloseTo(Math.sqrt(2 * 500_000 ** 2 + (2 * 500_000) ** 2), 4);
+    expect(apart.cells.standardError).toBeCloseTo(Math.sqrt(2 * 500_000 ** 2 + 2 * 500_000 ** 2), 4);
   });
 
   it('scales each sample before the sum and leaves the density as counted', () => {
     const structure = combineSamples([{ input: { ...left, scaleUp: { kind: 'other-side' } }, suspensionId: null }, { input: left, suspensionId: null }]);
-    expect(structure.cells?.value).toBe(3e7);
+    expect(structure.cells.value).toBe(3e7);
     expect(structure.structureMassG).toBe(1.5);
     expect(structure.tissueMassG).toBe(1);
-    expect(structure.cellsPerMg?.value).toBeCloseTo(20_000, 8);
+    expect(structure.cellsPerMg.value).toBeCloseTo(20_000, 8);
     expect(structure.scaleUpFactors).toEqual([2, 1]);
   });
 
   it('gives the mass and counts of one animal for a sample pooled over four', () => {
     const structure = combineSamples([{ input: left, suspensionId: null, animals: 4 }]);
-    expect(structure.cells?.value).toBe(2.5e6);
+    expect(structure.cells.value).toBe(2.5e6);
     expect(structure.structureMassG).toBe(0.125);
-    expect(structure.cellsPerMg?.value).toBeCloseTo(20_000, 8);
+    expect(structure.cellsPerMg.value).toBeCloseTo(20_000, 8);
     expect(() => combineSamples([{ input: left, suspensionId: null, animals: 0 }])).toThrow(RangeError);
   });
 
   it('has no neurons where one of its samples has none counted', () => {
     const structure = combineSamples([{ input: left, suspensionId: null }, { input: { ...left, neun: null }, suspensionId: null }]);
-    expect(structure.neurons).toBeNull();
-    expect(structure.cells?.value).toBe(2e7);
-    expect(combineSamples([]).cells).toBeNull();
+    expect(structure.neurons).toEqual({ value: null, standardError: null, lower: null, upper: null });
+    expect(structure.cells.value).toBe(2e7);
+    expect(combineSamples([]).cells.value).toBeNull();
   });
 });
 
