@@ -22,6 +22,8 @@ export const LEAST_POINTS_FOR_FLAGS = 8;
 const LARGEST_ONE_BY_ONE = 2000;
 const STARTING_SHARE = 0.75;
 const FIRST_BLOCK_SHARE = 0.1;
+/** Distances are ordered in steps of this size. */
+const TIE = 1e-9;
 
 /**
  * Forward search for points that do not belong to the line, also where they hide one another.
@@ -51,9 +53,7 @@ export function searchForward(
   if (n < LEAST_POINTS_FOR_FLAGS || all.xAllEqual || !robust) return null;
 
   const nearness = log10Y.map((y, i) => Math.abs(y - robust.log10Coefficient - robust.exponent * log10X[i]!));
-  // Ties are broken by the values and not by position: the order given must not matter.
-  const order = nearness.map((_, i) => i).sort((a, b) =>
-    nearness[a]! - nearness[b]! || log10X[a]! - log10X[b]! || log10Y[a]! - log10Y[b]!);
+  const order = nearestFirst(nearness.map((_, i) => i), (i) => nearness[i]!, log10X, log10Y);
   let size = Math.ceil(STARTING_SHARE * n);
   while (size < n && lineSums(log10X, log10Y, order.slice(0, size)).xAllEqual) size += 1;
   const inside = order.slice(0, size);
@@ -64,21 +64,27 @@ export function searchForward(
   for (;;) {
     const line = lineThrough(lineSums(log10X, log10Y, inside));
     const limit = tCritical(1 - alpha / n, inside.length - 2);
-    const distance = (i: number): number => line.distance(log10X[i]!, log10Y[i]!, 1);
-    outside = outside
-      .map((i) => ({ i, size: Math.abs(distance(i)) }))
-      .sort((a, b) => a.size - b.size || log10X[a.i]! - log10X[b.i]! || log10Y[a.i]! - log10Y[b.i]!)
-      .map(({ i }) => i);
-    while (block > 1 && !(Math.abs(distance(outside[Math.min(block, outside.length) - 1]!)) < limit)) {
-      block = Math.floor(block / 2);
-    }
-    const nearest = outside[0];
-    if (nearest === undefined || !(Math.abs(distance(nearest)) < limit)) {
+    const sizes = new Map(outside.map((i) => [i, Math.abs(line.distance(log10X[i]!, log10Y[i]!, 1))]));
+    outside = nearestFirst(outside, (i) => sizes.get(i)!, log10X, log10Y);
+    block = Math.min(block, outside.length);
+    const admissible = (rank: number): boolean => sizes.get(outside[rank - 1]!)! < limit;
+    while (block > 1 && !admissible(block)) block = Math.floor(block / 2);
+    if (block === 0 || !admissible(1)) {
       return finish(log10X, log10Y, new Set(outside), line, limit, inBlocks);
     }
-    inside.push(...outside.splice(0, Math.min(block, outside.length)));
-    if (outside.length === 0) block = 1;
+    for (const i of outside.splice(0, block)) inside.push(i);
   }
+}
+
+/**
+ * Indexes by distance. Ties, to within rounding, are broken by the values: neither the order given
+ * nor the unit of x and y may decide.
+ */
+function nearestFirst(
+  members: readonly number[], distance: (i: number) => number, x: readonly number[], y: readonly number[],
+): number[] {
+  const steps = members.map((i) => ({ i, step: Math.round(distance(i) / TIE) }));
+  return steps.sort((a, b) => a.step - b.step || x[a.i]! - x[b.i]! || y[a.i]! - y[b.i]!).map(({ i }) => i);
 }
 
 interface SearchLine {

@@ -3,8 +3,10 @@ import { LEAST_POINTS_FOR_DIAGNOSTICS, leverageAt } from './olsDiagnostics';
 import type { SmaFit } from './standardisedMajorAxis';
 import type { LeaveOneOut } from './types';
 
-/** A point that alone spreads x leaves no line behind. */
-const WHOLE_LEVERAGE = 1 - 1e-10;
+/** A point that alone spreads x leaves no line behind: less than this share of the sum is rounding. */
+const LEFT_SHARE = 1e-10;
+/** Moves that differ by less are equal: which rounds up depends on the unit. */
+const EQUAL_MOVES = 1e-10;
 
 /**
  * Range of the least-squares exponent when any one point is left out, in one pass:
@@ -21,7 +23,7 @@ export function leaveOneOutOls(fit: OlsFit, ids: readonly string[], log10X: read
   const b = fit.exponent.estimate;
   return range(b, ids, log10X.map((x, i) => {
     const rest = 1 - leverageAt(fit, x);
-    if (rest <= 1 - WHOLE_LEVERAGE) return null;
+    if (rest <= LEFT_SHARE) return null;
     return b - ((x - fit.meanLog10X) * fit.residuals[i]!) / (fit.sxx * rest);
   }));
 }
@@ -41,9 +43,10 @@ export function leaveOneOutSma(
     const [dx, dy] = [x - meanX, log10Y[i]! - meanY];
     const sxxWithout = sxx - dx * dx * weight;
     const syyWithout = syy - dy * dy * weight;
-    const sign = Math.sign(sxy - dx * dy * weight);
-    if (sxxWithout <= 1e-10 * sxx || syyWithout <= 1e-10 * syy || sign === 0) return null;
-    return sign * Math.sqrt(syyWithout / sxxWithout);
+    const sxyWithout = sxy - dx * dy * weight;
+    const spreadless = sxxWithout <= LEFT_SHARE * sxx || syyWithout <= LEFT_SHARE * syy;
+    if (spreadless || Math.abs(sxyWithout) <= LEFT_SHARE * Math.sqrt(sxx * syy)) return null;
+    return Math.sign(sxyWithout) * Math.sqrt(syyWithout / sxxWithout);
   }));
 }
 
@@ -58,8 +61,9 @@ function range(full: number, ids: readonly string[], exponents: (number | null)[
     if (exponent === null) return null;
     lower = Math.min(lower, exponent);
     upper = Math.max(upper, exponent);
-    if (Math.abs(exponent - full) > largestMove) {
-      largestMove = Math.abs(exponent - full);
+    const move = Math.abs(exponent - full);
+    if (move > largestMove + EQUAL_MOVES * Math.abs(full)) {
+      largestMove = move;
       mostMoving = ids[i]!;
     }
   }

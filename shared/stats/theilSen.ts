@@ -2,7 +2,10 @@ import { median } from './median';
 
 export interface TheilSenLine {
   exponent: number;
+  /** Median of y less exponent times median of x: the line passes through the medians. */
   log10Coefficient: number;
+  /** Median of y − b·x, the other definition in use: as many points above as below. */
+  log10CoefficientOfResiduals: number;
   /** Pairs of points with different x, whose slopes were ranked. */
   pairs: number;
 }
@@ -11,8 +14,8 @@ export interface TheilSenLine {
 const LARGEST_LISTED = 500;
 
 /**
- * Theil–Sen line: the exponent is the median of the slopes of all pairs with different x, the
- * coefficient the median of y − b·x.
+ * Theil–Sen line: the exponent is the median of the slopes of all pairs with different x; the line
+ * passes through the medians of x and y.
  *
  * Above 500 points the median is found without listing the pairs: the slopes below a trial value
  * are counted as inversions of y − trial·x in the order of x, O(n log n), and the trial is bisected
@@ -33,8 +36,12 @@ export function fitTheilSen(log10X: readonly number[], log10Y: readonly number[]
     ? medianOfListedSlopes(log10X, log10Y)
     : medianOfCountedSlopes(log10X, log10Y);
   if (!found) return null;
-  const log10Coefficient = median(log10Y.map((y, i) => y - found.exponent * log10X[i]!));
-  return { ...found, log10Coefficient };
+  const { exponent } = found;
+  return {
+    ...found,
+    log10Coefficient: median(log10Y) - exponent * median(log10X),
+    log10CoefficientOfResiduals: median(log10Y.map((y, i) => y - exponent * log10X[i]!)),
+  };
 }
 
 interface MedianSlope {

@@ -18,7 +18,7 @@ export interface ReferenceFit {
   outlier_test_top5: { name: string[]; rstudent: number[]; p: number[]; bonf_p: number[] };
   sma: Record<'slope' | 'slope_lo' | 'slope_hi' | 'intercept' | 'intercept_lo' | 'intercept_hi' | 'r2' | 'n' | 'df', number>;
   sma_tests: { b0: number; r: number; F: number; df1: number; df2: number; p: number }[];
-  theil_sen: { slope: number; intercept_median_residual: number; n_pairs: number };
+  theil_sen: { slope: number; intercept_median_y_minus_b_median_x: number; intercept_median_residual: number; n_pairs: number };
   points: { label: string[] } & Record<'x_raw' | 'y_raw' | 'fitted_log10' | 'residual' | 'hat' | 'rstandard' | 'rstudent' | 'cooks' | 'dffits', number[]>;
 }
 
