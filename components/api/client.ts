@@ -1,4 +1,4 @@
-import type { z } from 'zod';
+import { z } from 'zod';
 import { problemSchema } from '../../shared/contracts/problems';
 import { ApiError } from './problem';
 
@@ -6,6 +6,8 @@ import { ApiError } from './problem';
 const origin = process.env.EXPO_PUBLIC_API_URL ?? '';
 const base = `${origin}/api/v1`;
 const TIMEOUT_MS = 30_000;
+/** For answers of which only the failure is parsed. */
+const unreadable = z.never();
 
 export type Method = 'POST' | 'PUT' | 'PATCH' | 'DELETE';
 
@@ -60,6 +62,12 @@ async function answer<Schema extends z.ZodType>(response: Response, schema: Sche
 export const api = {
   async get<Schema extends z.ZodType>(path: string, schema: Schema, options: RequestOptions = {}): Promise<z.output<Schema>> {
     return answer(await request(`${base}${path}`, {}, options), schema);
+  },
+
+  /** Plain text, as citations come. */
+  async text(path: string, options: RequestOptions = {}): Promise<string> {
+    const response = await request(`${base}${path}`, { headers: { Accept: 'text/plain, application/x-bibtex' } }, options);
+    return response.ok ? response.text() : answer(response, unreadable);
   },
 
   /** A FormData body is sent as multipart, anything else as JSON; `undefined` sends none. */

@@ -1,5 +1,4 @@
 import { useMutation, useQuery } from '@tanstack/react-query';
-import { z } from 'zod';
 import { verifyAnswerSchema, versionListSchema, versionPageSchema } from '../../shared/contracts/versions';
 import { api, queryString } from '../api/client';
 import { keys } from './keys';
@@ -22,7 +21,7 @@ export function useVerify(label: string) {
 export function useCitation(label: string, style: 'text' | 'bibtex', records: readonly string[], enabled = true) {
   return useQuery({
     queryKey: keys.versions.citation({ label, style, records }),
-    queryFn: async ({ signal }) => (await api.get(`/versions/${encodeURIComponent(label)}/citation${queryString({ style, records, format: 'json' })}`, z.object({ citation: z.string() }), { signal })).citation,
+    queryFn: ({ signal }) => api.text(`/versions/${encodeURIComponent(label)}/citation${queryString({ style, records })}`, { signal }),
     staleTime: staleTimes.frozen,
     enabled,
   });
