@@ -39,6 +39,8 @@ export interface RouteDefinition<Params, Query, Body, Answer, Loaded> {
   load?: (input: { context: Context; actor: Actor; params: Params }) => Promise<Loaded>;
   /** Limits beyond the role (own laboratory), still before the body is looked at. */
   authorize?: (input: { context: Context; actor: Actor; params: Params; loaded: Loaded }) => Promise<void> | void;
+  /** Rate limit of this register, asked for once the permission is settled and before anything is read. */
+  limit?: (context: Context) => express.RequestHandler;
   /** Express middleware in front, for example a rate limit or multer. Runs after the permission is settled. */
   before?: express.RequestHandler;
   handle: (input: RouteInput<Params, Query, Body, Loaded>) => Promise<Answer>;
@@ -105,6 +107,7 @@ export function defineRoute<Params = Record<string, never>, Query = Record<strin
       const loaded = (definition.load === undefined ? undefined : await definition.load({ context, actor, params: knownParams })) as Loaded;
       if (!isPermitted(action, visitor?.roles ?? null)) throw new AppError('not-allowed', neededRoles(action));
       await definition.authorize?.({ context, actor, params: knownParams, loaded });
+      if (definition.limit !== undefined) await runBefore(definition.limit(context), request, response);
       if (definition.before !== undefined) await runBefore(definition.before, request, response);
       if (response.headersSent) return;
       const query = (definition.query === undefined ? {} : parseInput(definition.query, request.query, 'query')) as Query;

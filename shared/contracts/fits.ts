@@ -34,12 +34,16 @@ export const scalingFitSchema = z.object({
   smearingFactor: nullableNumber,
   lambda: z.object({ estimate: z.number(), lower: nullableNumber, upper: nullableNumber, atBound: z.boolean() }).nullable(),
   bootstrap: z.object({ lower: z.number(), upper: z.number(), replicates: z.number(), seed: z.number() }).nullable(),
-  tests: z.array(z.object({ exponent: z.number(), statistic: z.number(), df: z.number(), p: z.number() })),
-  predictions: z.array(z.object({ x: z.number(), estimate: nullableNumber, confidence: interval, prediction: interval, extrapolated: z.boolean().optional() })),
+  /** `statistic` is t (least squares) or F on 1 and `df` (SMA); null with its p where nothing is left to test. */
+  tests: z.array(z.object({ exponent: z.number(), statistic: nullableNumber, df: z.number(), p: nullableNumber })),
+  /** Null where the method does not predict; `notes` says why. */
+  predictions: z.array(z.object({ x: z.number(), estimate: nullableNumber, confidence: interval, prediction: interval, extrapolated: z.boolean().optional() })).nullable(),
   points: z.array(fitPointSchema),
   xRange: z.object({ lower: z.number(), upper: z.number() }).nullable(),
   leaveOneOut: z.object({ lower: z.number(), upper: z.number(), mostMoving: z.string() }).nullable(),
   unfit: z.object({ code: z.string(), message: z.string() }).nullable(),
+  /** Why a field is null, and what else the reader should know of this fit. */
+  notes: z.array(z.string()).optional(),
   /** What a figure needs to draw line and bands without refitting: log10 x. */
   design: z.object({ meanLog10X: z.number(), sxx: z.number(), tCritical: nullableNumber, level: z.number() }).nullable(),
 });

@@ -1,0 +1,29 @@
+import type { FitsRequest, ScalingFitAnswer } from '../../../shared/contracts/fits';
+import { fitScaling } from '../../../shared/stats/fit';
+import type { ScalingFit } from '../../../shared/stats/types';
+
+/**
+ * One fit in the shape of the public answer.
+ * @param fit a fit of shared/stats, raw units, log10–log10
+ * @returns the same numbers; `design` holds what a figure needs to draw line and bands, null where there is no line
+ */
+export function toFitAnswer(fit: ScalingFit): ScalingFitAnswer {
+  const { line, level: _level, ...rest } = fit;
+  return {
+    ...rest,
+    tests: fit.tests.map(({ exponent, statistic, df, p }) => ({ exponent, statistic, df, p })),
+    predictions: fit.predictions === null ? null : fit.predictions.map(({ log10Estimate: _log10, ...prediction }) => prediction),
+    points: fit.points.map(({ internallyStudentised: _internal, dffits: _dffits, ...point }) => point),
+    design: line === null ? null : { meanLog10X: line.meanLog10X, sxx: line.sxx, tCritical: line.tCritical, level: line.level },
+  };
+}
+
+/**
+ * Fits the points of a request, one line a group; nothing is stored.
+ * @param request raw points above 0, validated by its contract
+ * @returns fits in order of first appearance of their groups; what gives no line carries `unfit` with its reason
+ */
+export function fitPoints(request: FitsRequest): { fits: ScalingFitAnswer[]; comparison: null; match: null } {
+  const { fits, comparison, match } = fitScaling(request);
+  return { fits: fits.map(toFitAnswer), comparison, match };
+}
