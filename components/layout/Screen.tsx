@@ -7,7 +7,7 @@ import { margin } from '../theme/tokens';
 import type { HeadingLook } from '../theme/typography';
 import { Text } from '../ui/Text';
 import { AccountLink } from './AccountLink';
-import { DemoMark } from './DemoMark';
+import { DemoMark } from '../marks/DemoMark';
 import { PageHeading } from './PageHeading';
 import { useBreakpoint } from './useBreakpoint';
 
