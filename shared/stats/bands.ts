@@ -10,6 +10,33 @@ export interface BandPoint {
   prediction: { lower: number; upper: number };
 }
 
+/** The fields of a stored fit that its line is made from; as they come out of JSON. */
+interface StoredFit {
+  n: number;
+  residualSd: number | null;
+  exponent: { estimate: number } | null;
+  log10Coefficient: { estimate: number } | null;
+  design: { meanLog10X: number; sxx: number; tCritical: number | null; level: number } | null;
+}
+
+/**
+ * The line of a stored fit, ready for `bandAt` and `predictBand`.
+ *
+ * @returns null where the fit has no line or its method no bands (standardised major axis)
+ */
+export function lineOf(fit: StoredFit): LineSummary | null {
+  const { n, residualSd, exponent, log10Coefficient, design } = fit;
+  if (!design || !exponent || !log10Coefficient || residualSd === null || design.tCritical === null) return null;
+  return {
+    ...design,
+    tCritical: design.tCritical,
+    n,
+    residualSd,
+    exponent: exponent.estimate,
+    log10Coefficient: log10Coefficient.estimate,
+  };
+}
+
 /**
  * Line, confidence band and prediction band at one log10 x, on log10 y.
  *

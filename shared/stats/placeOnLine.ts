@@ -17,7 +17,10 @@ export interface PlaceOnLine {
   /** y divided by the line. */
   ratio: number | null;
   log10Ratio: number;
-  /** Where one new species, or one specimen, is expected, in units of y. */
+  /** Where the ratio of one new species, or one specimen, is expected. */
+  lowerRatio: number | null;
+  upperRatio: number | null;
+  /** The same in units of y. */
   prediction: RawInterval;
   /** y lies within the prediction interval. */
   inside: boolean;
@@ -76,6 +79,8 @@ export function placeOnLine(
     expected: powerOfTen(band.log10Estimate),
     ratio: powerOfTen(log10Ratio),
     log10Ratio,
+    lowerRatio: powerOfTen(-error * line.tCritical),
+    upperRatio: powerOfTen(error * line.tCritical),
     prediction: rawInterval(band.prediction),
     inside: Math.abs(log10Ratio) <= Math.max(error * line.tCritical, fit.floor),
     side: Math.abs(log10Ratio) <= fit.floor ? 'on' : log10Ratio > 0 ? 'above' : 'below',

@@ -23,6 +23,6 @@ export function unfitGroup(
       leverage: null, cooksDistance: null, dffits: null, ...NO_FLAG,
     })),
     xRange: rangeOfX(points),
-    leaveOneOut: null, line: null, notes: [], unfit,
+    leaveOneOut: null, design: null, notes: [], unfit,
   };
 }

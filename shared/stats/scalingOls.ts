@@ -57,7 +57,7 @@ export function fitGroupOls(group: string | null, points: readonly FitPoint[], o
     })),
     xRange,
     leaveOneOut,
-    line,
+    design: { meanLog10X: line.meanLog10X, sxx: line.sxx, tCritical: line.tCritical, level: line.level },
     notes,
     unfit: null,
   };

@@ -48,7 +48,7 @@ export function fitGroupSma(group: string | null, points: readonly FitPoint[], o
     })),
     xRange: rangeOfX(points),
     leaveOneOut,
-    line: null,
+    design: null,
     notes,
     unfit: null,
   };

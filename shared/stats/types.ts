@@ -102,18 +102,22 @@ export interface LeaveOneOut extends Interval {
   mostMoving: string;
 }
 
-/** What a picture needs to draw the least-squares line and both bands without refitting. */
-export interface LineSummary {
-  n: number;
+/** Of a least-squares fit, what its bands need beside its own numbers (see `lineOf` in bands.ts). */
+export interface FitDesign {
   meanLog10X: number;
   /** Sum of squares of log10 x about its mean. */
   sxx: number;
+  /** Two-sided critical value of t at `level` on n − 2. */
+  tCritical: number;
+  level: number;
+}
+
+/** All that draws a least-squares line and both its bands without refitting. */
+export interface LineSummary extends FitDesign {
+  n: number;
   residualSd: number;
   exponent: number;
   log10Coefficient: number;
-  level: number;
-  /** Two-sided critical value of t at `level` on n − 2. */
-  tCritical: number;
 }
 
 /** One group's fit. Fields that the method does not define are null, and `notes` says why. */
@@ -137,7 +141,7 @@ export interface ScalingFit {
   points: DiagnosedPoint[];
   xRange: Interval;
   leaveOneOut: LeaveOneOut | null;
-  line: LineSummary | null;
+  design: FitDesign | null;
   notes: string[];
   unfit: Unfit | null;
 }

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { lineOf } from '../../../shared/stats/bands';
 import { fitScaling } from '../../../shared/stats/fit';
 import { fitOls } from '../../../shared/stats/leastSquares';
 import { placeOnLine } from '../../../shared/stats/placeOnLine';
@@ -18,7 +19,7 @@ describe.each(methods)('%s', (method) => {
   it.each([1, 2])('gives no line for %i species and says so', (n) => {
     const fit = fitOne(pointsOf([1, 2].slice(0, n), [3, 5].slice(0, n)), method, { against: [1], predictAt: [4] });
     expect(fit.unfit).toEqual({ code: 'too-few-points', message: `A line needs at least 3 species, found ${n}.` });
-    expect(fit).toMatchObject({ n, df: null, exponent: null, log10Coefficient: null, rSquared: null, line: null, leaveOneOut: null, tests: [] });
+    expect(fit).toMatchObject({ n, df: null, exponent: null, log10Coefficient: null, rSquared: null, design: null, leaveOneOut: null, tests: [] });
     expect(fit.points).toHaveLength(n);
     expect(notFinite(fit)).toEqual([]);
   });
@@ -146,11 +147,15 @@ describe('a standardised major axis', () => {
   });
 
   it('leaves null what it does not define, and says why', () => {
-    expect(fit).toMatchObject({ predictions: null, logLikelihood: null, aic: null, smearingFactor: null, line: null });
+    expect(fit).toMatchObject({ predictions: null, logLikelihood: null, aic: null, smearingFactor: null, design: null });
     expect(fit.exponent!.standardError).toBeNull();
     expect(fit.points.every((point) => point.leverage === null && point.studentised === null && point.cooksDistance === null)).toBe(true);
     expect(fit.notes.join(' ')).toMatch(/are not defined/);
     expect(fit.notes.join(' ')).toMatch(/least-squares fit of the same species/);
+  });
+
+  it('has no bands to draw', () => {
+    expect(lineOf(fit)).toBeNull();
   });
 
   it('cannot be tested against 0', () => {

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { bandAt, predictBand } from '../../../shared/stats/bands';
+import { bandAt, lineOf, predictBand } from '../../../shared/stats/bands';
 import type { FitMethod, FitPoint, ScalingFit } from '../../../shared/stats/types';
 import { relativeError } from './reference';
 import { fitOne, pointsOf } from './support';
@@ -109,8 +109,8 @@ describe('the bands of a least-squares line', () => {
       const x = 10 ** log10X;
       const fit = fitOne(points, 'ols', { predictAt: [x], level: 0.9 });
       // The line as it would come out of the database: through JSON.
-      const stored = JSON.parse(JSON.stringify(fit.line)) as NonNullable<typeof fit.line>;
-      const [drawn] = predictBand(stored, [Math.log10(x)]);
+      const stored = JSON.parse(JSON.stringify(fit)) as ScalingFit;
+      const [drawn] = predictBand(lineOf(stored)!, [Math.log10(x)]);
       const [predicted] = fit.predictions!;
       expect(close(Math.log10(predicted!.prediction.upper!), drawn!.prediction.upper)).toBe(true);
       expect(close(Math.log10(predicted!.confidence.lower!), drawn!.confidence.lower)).toBe(true);
@@ -119,7 +119,7 @@ describe('the bands of a least-squares line', () => {
   });
 
   it('are narrowest at the mean of log10 x, where the line is known to s/√n', () => {
-    const { line } = fitOne(pointsOf([1, 10, 100, 1000], [1, 12, 80, 1100]));
+    const line = lineOf(fitOne(pointsOf([1, 10, 100, 1000], [1, 12, 80, 1100])));
     const atMean = bandAt(line!, 1.5);
     const half = (atMean.confidence.upper - atMean.confidence.lower) / 2;
     expect(half).toBeCloseTo(line!.tCritical * line!.residualSd / 2, 12);

@@ -73,6 +73,9 @@ describe('the human cortex against the primates', () => {
     if (place.kind === 'unfit') throw new Error(place.unfit.message);
     expect(place.ratio).toBeCloseTo(2.51, 2);
     expect(place).toMatchObject({ n: 11, df: 9, inside: true, side: 'above', extrapolated: true });
+    expect(place.prediction.upper! / place.expected!).toBeCloseTo(place.upperRatio!, 9);
+    expect(place.prediction.lower! / place.expected!).toBeCloseTo(place.lowerRatio!, 9);
+    expect(place.upperRatio).toBeGreaterThan(place.ratio!);
     expect(place.exponent.estimate).toBeCloseTo(0.989, 3);
     expect(place.exponent.standardError).toBeCloseTo(0.08, 3);
   });

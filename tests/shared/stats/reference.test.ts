@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { bandAt } from '../../../shared/stats/bands';
+import { bandAt, lineOf } from '../../../shared/stats/bands';
 import { fitScaling } from '../../../shared/stats/fit';
 import { fitOls, testOlsExponent } from '../../../shared/stats/leastSquares';
 import { logPoints } from '../../../shared/stats/points';
@@ -76,7 +76,7 @@ describe.each(cases)('$dataset, $subset, against R', ({ reference }) => {
     const { predictions } = reference;
     expect(predictions.log10_x).toHaveLength(5);
     expect(disagreements(predictions.log10_x.flatMap((log10X, i) => {
-      const band = bandAt(fit.line!, log10X);
+      const band = bandAt(lineOf(fit)!, log10X);
       const predicted = fit.predictions![i]!;
       // Limits that pass through 0 on log10 are compared on the size of the band.
       const near = (found: number, expected: number): [number, number] => [found - expected + 1, 1];
