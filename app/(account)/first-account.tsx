@@ -1,0 +1,7 @@
+import { useLocalSearchParams } from 'expo-router';
+import { FirstAccountScreen } from '../../components/account/FirstAccountScreen';
+
+export default function FirstAccountRoute() {
+  const { token } = useLocalSearchParams<{ token?: string }>();
+  return <FirstAccountScreen token={token} />;
+}

@@ -1,0 +1,5 @@
+import { ForgotPasswordScreen } from '../../components/account/PasswordScreens';
+
+export default function ForgotPasswordRoute() {
+  return <ForgotPasswordScreen />;
+}

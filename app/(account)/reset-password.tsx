@@ -1,0 +1,7 @@
+import { useLocalSearchParams } from 'expo-router';
+import { ResetPasswordScreen } from '../../components/account/PasswordScreens';
+
+export default function ResetPasswordRoute() {
+  const { token } = useLocalSearchParams<{ token?: string }>();
+  return <ResetPasswordScreen token={token} />;
+}

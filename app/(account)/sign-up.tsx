@@ -1,0 +1,5 @@
+import { SignUpScreen } from '../../components/account/SignUpScreen';
+
+export default function SignUpRoute() {
+  return <SignUpScreen />;
+}
