@@ -179,6 +179,16 @@ async function closeCluster({ name, users, binaries, data, identity }) {
   });
 }
 
+/** Ends a server that a killed start has left on the cluster at `place`; without one it does nothing. */
+export async function stopLeftover(place) {
+  const data = join(place, 'data');
+  const found = postmaster(data);
+  if (found === undefined || !existsSync(data) || !isPostmasterOf(found.pid, data)) return;
+  // SIGINT is PostgreSQL's fast stop.
+  process.kill(found.pid, 'SIGINT');
+  for (const until = Date.now() + 60_000; postmaster(data) !== undefined && Date.now() < until; ) await wait(100);
+}
+
 /** The address of a database of that name in the same cluster. */
 export function databaseUrl(adminUrl, name) {
   const url = new URL(adminUrl);
@@ -195,8 +205,14 @@ export async function ensureDatabase(url) {
     if (error.code !== '3D000') throw new StopError(`The database cannot be reached (${withoutPassword(url)}): ${error.message || error.code}.`);
   }
   const name = decodeURIComponent(new URL(url).pathname.slice(1));
-  await query(databaseUrl(url, 'postgres'), `create database "${name.replaceAll('"', '""')}"`);
-  return true;
+  try {
+    await query(databaseUrl(url, 'postgres'), `create database "${name.replaceAll('"', '""')}"`);
+    return true;
+  } catch (error) {
+    // Another starter made it in between.
+    if (error.code === '42P04' || error.code === '23505') return false;
+    throw new StopError(`The database ${withoutPassword(url)} is absent and could not be made: ${error.message}.`);
+  }
 }
 
 export function withoutPassword(url) {

@@ -90,3 +90,14 @@ export function liveUsers(name) {
   for (const gone of names.filter((entry) => !alive.includes(entry))) rmSync(join(folder, gone), { force: true });
   return alive.map((entry) => Number(entry.split('-')[0]));
 }
+
+/** For what only one process of a checkout may do at a time; `refusal` makes the sentence for the second. */
+export async function joinAlone(name, refusal) {
+  return await withLock(name, async () => {
+    const [other] = liveUsers(name);
+    if (other !== undefined) throw new StopError(refusal(other));
+    return joinUsers(name);
+  });
+}
+
+export const alreadyRuns = (pid) => `The register of this checkout already runs (process ${pid}): stop it first. A second one runs from another checkout, with another PORT.`;

@@ -112,8 +112,7 @@ export class ConfigError extends Error {
 
 const secretNames = /PASSWORD|SECRET|KEY/;
 
-function shown(name: string, value: string | undefined): string {
-  if (value === undefined) return 'is not set';
+function shown(name: string, value = ''): string {
   if (secretNames.test(name)) return `has ${value.length} characters`;
   return `is "${name === 'DATABASE_URL' ? value.replace(/:[^:@/]*@/, ':…@') : value}"`;
 }
@@ -130,14 +129,17 @@ export function loadConfig(environment: Record<string, string | undefined>): Con
   const present = Object.fromEntries(Object.entries(environment).filter(([, value]) => value !== undefined && value.trim() !== ''));
   const parsed = environmentSchema.safeParse(present);
   if (!parsed.success) {
-    const ending = present['KARYA_DEMO'] === 'off' ? ' (required outside demo mode)' : '';
-    throw new ConfigError(
-      parsed.error.issues.map((issue) => {
-        const name = String(issue.path[0]);
-        const value = present[name];
-        return `${name} ${shown(name, value)}; expected is ${issue.message}${value === undefined ? ending : ''}.`;
-      }),
-    );
+    const names = parsed.error.issues.map((issue) => String(issue.path[0]));
+    const missing = names.filter((name) => present[name] === undefined);
+    // Outside demo mode a first try lacks them all: one sentence reads better than seven.
+    const together = present['KARYA_DEMO'] === 'off' && missing.length > 1;
+    const sentences = parsed.error.issues.flatMap((issue, index) => {
+      const name = names[index] ?? '';
+      if (present[name] !== undefined) return [`${name} ${shown(name, present[name])}; expected is ${issue.message}.`];
+      return together ? [] : [`${name} is not set; expected is ${issue.message}${present['KARYA_DEMO'] === 'off' ? ' (required outside demo mode)' : ''}.`];
+    });
+    if (together) sentences.push(`Outside demo mode ${missing.join(', ')} are required and not set; README says what each is.`);
+    throw new ConfigError(sentences);
   }
   const settings = parsed.data;
   const demo = settings.KARYA_DEMO === 'on';

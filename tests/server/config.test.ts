@@ -68,6 +68,10 @@ describe('settings', () => {
     expect(message).toMatch(new RegExp(`^${name} is not set; expected is .* \\(required outside demo mode\\)\\.$`));
   });
 
+  it('name all that is missing outside demo mode in one sentence', () => {
+    expect(refusal({ KARYA_DEMO: 'off', AUTH_SECRET: undefined, MAIL_API_KEY: undefined })).toBe('Outside demo mode AUTH_SECRET, MAIL_API_KEY are required and not set; README says what each is.');
+  });
+
   it.each([
     ['HOST', '0.0.0.0'],
     ['APP_URL', 'https://register.example'],
