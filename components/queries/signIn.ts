@@ -1,6 +1,6 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { z } from 'zod';
-import { firstAccountSchema } from '../../shared/contracts/people';
+import type { firstAccountSchema } from '../../shared/contracts/people';
 import { api } from '../api/client';
 import { keys } from './keys';
 
