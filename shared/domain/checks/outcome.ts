@@ -44,3 +44,8 @@ export function hasBlocks(checks: readonly CheckResult[]): boolean {
 export function applicable(checks: readonly (CheckResult | null)[]): CheckResult[] {
   return checks.filter((check): check is CheckResult => check !== null);
 }
+
+/** Sorts by level, keeping the order within each. */
+export function byLevel(checks: readonly CheckResult[]): CheckResult[] {
+  return (['blocks', 'warns', 'passes'] as const).flatMap((level) => checks.filter((check) => check.level === level));
+}
