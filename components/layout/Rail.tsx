@@ -47,7 +47,7 @@ export function Rail({ places, current, height }: RailProps) {
             place={place}
             current={index === current}
             fontSize={16}
-            style={{ position: 'absolute', right: LABEL_END - (place.waiting > 0 ? 9 : 0), top: yOf(index) - 20, height: 40, flexDirection: 'row', alignItems: place.waiting > 0 ? 'flex-start' : 'center', paddingTop: place.waiting > 0 ? 8 : 0 }}
+            style={{ position: 'absolute', right: LABEL_END, top: yOf(index) - 20, height: 40, flexDirection: 'row', alignItems: place.waiting > 0 ? 'flex-start' : 'center', paddingTop: place.waiting > 0 ? 8 : 0 }}
           />
         ))}
       </View>

@@ -50,7 +50,7 @@ export function CladeName({ clade, name = clade, count, spec }: { clade: string;
   return (
     <Row gap={8}>
       <CladeMark clade={clade} spec={spec} />
-      <Text size="table">
+      <Text size="table" nowrap>
         {name}
         {count === undefined ? null : <Span tone="inkSoft"> {count}</Span>}
       </Text>

@@ -66,7 +66,7 @@ function Labels({ ribbons, side }: { ribbons: readonly Ribbon[]; side: 'top' | '
         if (!label) return null;
         return (
           <View key={ribbon.key} style={{ position: 'absolute', left: span.from, top: 0 }}>
-            <Text size="secondary" style={{ whiteSpace: 'nowrap' } as object}>
+            <Text size="secondary" nowrap>
               {label.name}
               <Span weight="semibold" tone={side === 'top' ? 'mass' : 'neurons'}>
                 {label.share}

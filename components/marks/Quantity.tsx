@@ -32,7 +32,7 @@ export function Quantity({ value, error = null, kind, unit = '', tone = 'ink', s
   const numberTone: Tone = tone;
   return (
     <Element as="span" attributes={{ onCopy: copyPlain(text.plain) }} css={{ whiteSpace: 'nowrap' }}>
-      <Text size={size} tone="inkSoft" style={{ whiteSpace: 'nowrap' } as object}>
+      <Text size={size} tone="inkSoft" nowrap>
         {bracket ? '(' : ''}
         <Span tone={numberTone} weight="semibold">
           {text.value}

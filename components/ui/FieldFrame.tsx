@@ -37,7 +37,7 @@ export function describedBy(id: string, { error, warning, hint }: Pick<FieldText
 export function FieldFrame({ id, label, tone = 'ink', error, warning, hint, labelHidden, grow, children }: FieldFrameProps) {
   const { colour } = useTheme();
   return (
-    <View style={{ gap: 4, flexGrow: grow ? 1 : 0, flexShrink: 1, minWidth: 0 }}>
+    <View style={[{ gap: 4, minWidth: 0 }, grow ? { flexGrow: 1, flexShrink: 1, flexBasis: 0 } : null]}>
       <Element
         as="label"
         attributes={{ htmlFor: id, id: `${id}-label` }}

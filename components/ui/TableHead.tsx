@@ -56,7 +56,7 @@ function HeadWords<Item>({ column, sorted, onSort }: { column: TableColumn<Item>
     );
   }
   const words = (
-    <Text size="secondary" tone={column.tone ?? 'inkSoft'} weight={column.tone || sorted ? 'semibold' : 'regular'}>
+    <Text size="secondary" tone={column.tone ?? 'inkSoft'} weight={column.tone || sorted ? 'semibold' : 'regular'} nowrap={column.nowrap}>
       {column.head}
       {sorted ? (sorted === 'ascending' ? ' ↑' : ' ↓') : ''}
     </Text>

@@ -32,7 +32,7 @@ export function TableRow<Item>({ item, columns, href, current, dense, rowIndex, 
       nativeStyle={{ flexDirection: 'row', borderBottomWidth: 1, borderBottomColor: colour.hairline }}
     >
       {columns.map((column, index) => {
-        const content = <CellContent>{column.cell(item)}</CellContent>;
+        const content = <CellContent nowrap={column.nowrap}>{column.cell(item)}</CellContent>;
         return (
           <Element
             key={column.key}

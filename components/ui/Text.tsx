@@ -19,6 +19,8 @@ interface TextProps {
   align?: 'left' | 'right' | 'center';
   /** Rendered as a paragraph. */
   paragraph?: boolean;
+  /** Does not break. */
+  nowrap?: boolean;
   /** Cut with an ellipsis after so many lines. */
   lines?: number;
   id?: string;
@@ -28,7 +30,7 @@ interface TextProps {
 }
 
 /** Running text: size, tone and weight by name. Semibold Lora does not exist here: it becomes medium. */
-export function Text({ size = 'body', tone = 'ink', weight = 'regular', science, italic, align, paragraph, lines, id, role, style, children }: TextProps) {
+export function Text({ size = 'body', tone = 'ink', weight = 'regular', science, italic, align, paragraph, nowrap, lines, id, role, style, children }: TextProps) {
   const { colour } = useTheme();
   const { wide } = useBreakpoint();
   return (
@@ -39,6 +41,8 @@ export function Text({ size = 'body', tone = 'ink', weight = 'regular', science,
       style={[
         textSize(size, wide),
         { fontFamily: fontFamily(faceOf(weight, science, italic)), color: colour[tone], textAlign: align, maxWidth: '100%' },
+        // A property of the web; native text in a row does not break by itself.
+        nowrap ? ({ whiteSpace: 'nowrap' } as TextStyle) : null,
         style,
       ]}
     >

@@ -1,0 +1,1 @@
+export { VictoryArea, VictoryAxis, VictoryChart, VictoryContainer, VictoryLabel, VictoryLine, VictoryScatter } from 'victory-native';
