@@ -25,6 +25,13 @@ function refuseForeignOrigin(context: Context): express.RequestHandler {
   };
 }
 
+/** better-auth says when to try again in a header of its own; clients look for the standard one. */
+const sayRetryAfter: express.RequestHandler = (_request, response, next) => {
+  const setHeader = response.setHeader.bind(response);
+  response.setHeader = (name, value) => setHeader(name.toLowerCase() === 'x-retry-after' ? 'Retry-After' : name, value);
+  next();
+};
+
 /** Builds the application without listening, so that tests mount it on a port of their own. */
 export function buildApp(context: Context, auth: Auth): Express {
   const app = express();
@@ -62,6 +69,8 @@ export function buildApp(context: Context, auth: Auth): Express {
     next();
   });
   app.use('/api', refuseForeignOrigin(context));
+  // Read here as text and handed on as it is: better-auth itself reads bodies of any size.
+  app.use('/api/auth', express.text({ type: () => true, limit: '64kb' }), sayRetryAfter);
   app.all('/api/auth/*splat', toNodeHandler(auth));
   app.use('/api', express.json({ limit: '2mb' }));
   mountRoutes(app, routes, context, (request: Request) => readActor(context, auth, request.headers));

@@ -1,5 +1,6 @@
 import { drizzleAdapter } from '@better-auth/drizzle-adapter';
 import { betterAuth } from 'better-auth';
+import { APIError, createAuthMiddleware } from 'better-auth/api';
 import { fromNodeHeaders } from 'better-auth/node';
 import type { IncomingHttpHeaders } from 'node:http';
 import * as schema from '../db/schema/index';
@@ -7,6 +8,21 @@ import { findActor } from '../db/queries/people';
 import type { Actor, Context } from './context';
 import { today } from './context';
 import { sendAccountMail } from './services/accountMail';
+import { forgetFailures, takeSignInAttempt } from './services/account/signInLimit';
+
+const signInPath = '/sign-in/email';
+
+/** Where the mailed link leads: the address is confirmed on the way, and the client says so (or why not, as `?error=`). */
+const verifyAddress = (appUrl: string, token: string) => `${appUrl}/api/auth/verify-email?token=${encodeURIComponent(token)}&callbackURL=${encodeURIComponent('/verified')}`;
+const resetAddress = (appUrl: string, token: string) => `${appUrl}/reset-password?token=${encodeURIComponent(token)}`;
+
+function emailIn(body: unknown): string | null {
+  const email: unknown = typeof body === 'object' && body !== null ? Reflect.get(body, 'email') : null;
+  return typeof email === 'string' ? email : null;
+}
+
+/** A name is one line of one to 120 characters. */
+const isName = (name: string) => name.trim().length >= 1 && name.length <= 120 && !/\p{Cc}/u.test(name);
 
 /** Sign-in by mail address and password, with verified addresses; sessions in the database. */
 export function createAuth(context: Context) {
@@ -49,12 +65,14 @@ export function createAuth(context: Context) {
       minPasswordLength: 10,
       maxPasswordLength: 200,
       revokeSessionsOnPasswordReset: true,
-      sendResetPassword: async ({ user, url }) => sendAccountMail(context, user, 'reset-password', url),
+      sendResetPassword: async ({ user, token }) => sendAccountMail(context, user, 'reset-password', resetAddress(config.appUrl, token)),
+      onPasswordReset: async ({ user }) => forgetFailures(context, user.email),
     },
     emailVerification: {
       sendOnSignUp: true,
+      sendOnSignIn: true,
       autoSignInAfterVerification: true,
-      sendVerificationEmail: async ({ user, url }) => sendAccountMail(context, user, 'verify-address', url),
+      sendVerificationEmail: async ({ user, token }) => sendAccountMail(context, user, 'verify-address', verifyAddress(config.appUrl, token)),
     },
     user: {
       additionalFields: {
@@ -63,12 +81,35 @@ export function createAuth(context: Context) {
         disabledAt: { type: 'date', required: false, input: false },
       },
     },
+    hooks: {
+      before: createAuthMiddleware(async (call) => {
+        const email = emailIn(call.body);
+        if (call.path !== signInPath || email === null) return;
+        const waitSeconds = await takeSignInAttempt(context, email);
+        if (waitSeconds === null) return;
+        const message = `Too many attempts for this account. Try again in ${Math.ceil(waitSeconds / 60)} minutes, or choose a new password.`;
+        throw new APIError('TOO_MANY_REQUESTS', { code: 'TOO_MANY_ATTEMPTS', message }, { 'Retry-After': String(waitSeconds) });
+      }),
+      after: createAuthMiddleware(async (call) => {
+        const session = call.context.newSession;
+        if (call.path === signInPath && session !== null) await forgetFailures(context, session.user.email);
+      }),
+    },
     databaseHooks: {
+      user: {
+        create: {
+          before: async (user) => {
+            if (!isName(user.name)) throw new APIError('BAD_REQUEST', { code: 'INVALID_NAME', message: 'A name is one line of 1 to 120 characters.' });
+            return { data: { ...user, name: user.name.trim() } };
+          },
+        },
+      },
       session: {
         create: {
           before: async (session) => {
             const actor = await findActor(db, session.userId, today(context));
-            return actor === null ? false : { data: session };
+            if (actor === null) throw new APIError('FORBIDDEN', { code: 'ACCOUNT_DISABLED', message: 'This account has been disabled. Ask the administrator.' });
+            return { data: session };
           },
         },
       },

@@ -19,7 +19,7 @@ function fromMiddleware(error: unknown): AppError | null {
     case 400:
       return new AppError('malformed-request', 'The body cannot be read as JSON.');
     case 413:
-      return new AppError('too-large', 'The body is larger than 2 MB.');
+      return new AppError('too-large', 'The body is larger than this address accepts (2 MB; 64 kB for signing in and up).');
     case 415:
       return new AppError('unsupported-type', 'The body is in an encoding that is not accepted.');
     default:

@@ -1,6 +1,11 @@
 import type { Route } from '../routing';
+import { auditRoutes } from './audit';
 import { calculatorRoutes } from './calculators';
 import { healthRoutes } from './health';
+import { labRoutes } from './labs';
+import { meRoutes } from './me';
+import { outboxRoutes } from './outbox';
+import { peopleRoutes } from './people';
 
 /** Every endpoint of the API. A test walks this list and fails where the role table has no row for one. */
-export const routes: readonly Route[] = [...healthRoutes, ...calculatorRoutes];
+export const routes: readonly Route[] = [...healthRoutes, ...calculatorRoutes, ...meRoutes, ...peopleRoutes, ...labRoutes, ...auditRoutes, ...outboxRoutes];
