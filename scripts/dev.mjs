@@ -34,7 +34,7 @@ async function develop() {
       Object.assign(settings, local.settings, { AUTH_SECRET: process.env.AUTH_SECRET || demoAuthSecret(dataFolder) });
     }
     const { default: concurrently } = await import('concurrently');
-    const env = { ...process.env, ...settings, EXPO_OFFLINE: '1', EXPO_NO_TELEMETRY: '1' };
+    const env = { ...process.env, ...settings, AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true', PATH: `${join(root, 'node_modules', '.bin')}:${process.env.PATH}`, EXPO_OFFLINE: '1', EXPO_NO_TELEMETRY: '1' };
     const { result } = concurrently(
       [
         { name: 'server', command: 'tsx watch --clear-screen=false server/main.ts', env },
