@@ -20,7 +20,7 @@ const scaling: Place = { label: 'Scaling', href: '/scaling' as Href, sections: [
 const bench: Place = { label: 'Bench', href: '/bench' as Href, sections: ['bench'], waiting: 0 };
 const versions: Place = { label: 'Versions', href: '/versions' as Href, sections: ['versions'], waiting: 0 };
 
-const deskSections = ['desk', 'submissions', 'review', 'rechecks', 're-checks', 'curate', 'people', 'taxa', 'trees', 'freeze'];
+const deskSections = ['desk', 'submissions', 'review', 'rechecks', 're-checks', 'curate', 'people', 'taxa', 'trees', 'freeze', 'labs', 'audit', 'outbox'];
 
 /** The fourth place by roles: their own one, or a desk with all of them for who holds several. */
 function fourthPlace({ roles, waiting }: PlacesOf): Place | null {

@@ -9,15 +9,18 @@ export interface Account {
   status: 'loading' | 'out' | 'in';
   id: string | null;
   name: string | null;
+  orcid: string | null;
   roles: readonly Role[];
   labName: string | null;
   /** The register runs with invented data. */
   demo: boolean;
   currentVersion: string | null;
   waiting: { submissions?: number; review?: number; curate?: number };
+  /** Notices not read yet. */
+  notices: number;
 }
 
-const nobody: Account = { status: 'loading', id: null, name: null, roles: [], labName: null, demo: false, currentVersion: null, waiting: {} };
+const nobody: Account = { status: 'loading', id: null, name: null, orcid: null, roles: [], labName: null, demo: false, currentVersion: null, waiting: {}, notices: 0 };
 
 /** The account of an answer of GET /me. */
 export function accountFrom(me: Me | undefined, failed: boolean): Account {
@@ -30,9 +33,11 @@ export function accountFrom(me: Me | undefined, failed: boolean): Account {
     status: 'in',
     id: person.id,
     name: person.name,
+    orcid: person.orcid,
     roles: person.roles,
     labName: person.lab?.name ?? null,
     waiting: { submissions: waiting.submissions, review: waiting.review, curate: waiting.curate },
+    notices: waiting.notices,
   };
 }
 
@@ -53,5 +58,14 @@ export function useSignOut() {
   return useMutation({
     mutationFn: () => api.auth('/sign-out', {}),
     onSuccess: () => client.resetQueries(),
+  });
+}
+
+/** Saves the own name and ORCID iD. */
+export function useSaveProfile() {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: (body: { name: string; orcid: string | null }) => api.send('PATCH', '/me', body, meSchema),
+    onSuccess: (me) => client.setQueryData(keys.me, me),
   });
 }

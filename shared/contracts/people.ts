@@ -27,6 +27,7 @@ export const membershipEndSchema = z.object({ untilDay: z.iso.date() });
 export const personPatchSchema = z.object({ disabled: z.boolean() });
 
 export const auditEntrySchema = z.object({ id: z.string(), at: timeSchema, actor: z.string(), action: z.string(), targetType: z.string(), targetId: z.string(), detail: z.record(z.string(), z.unknown()) });
+export type AuditEntry = z.infer<typeof auditEntrySchema>;
 export const auditQuerySchema = z.object({ action: z.string().max(80).optional(), ...pageQuery });
 
 /** Mail as sent, readable by the administrator of a demonstration register. */

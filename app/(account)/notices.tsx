@@ -1,0 +1,5 @@
+import { NoticesScreen } from '../../components/account/NoticesScreen';
+
+export default function NoticesRoute() {
+  return <NoticesScreen />;
+}

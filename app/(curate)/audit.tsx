@@ -1,0 +1,5 @@
+import { AuditScreen } from '../../components/people/AuditScreen';
+
+export default function AuditRoute() {
+  return <AuditScreen />;
+}

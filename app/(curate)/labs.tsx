@@ -1,0 +1,5 @@
+import { LabsScreen } from '../../components/people/LabsScreen';
+
+export default function LabsRoute() {
+  return <LabsScreen />;
+}

@@ -1,0 +1,5 @@
+import { OutboxScreen } from '../../components/people/OutboxScreen';
+
+export default function OutboxRoute() {
+  return <OutboxScreen />;
+}
