@@ -1,9 +1,12 @@
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { bandAt, lineOf, predictBand } from '../../../shared/stats/bands';
 import type { FitMethod, FitPoint, ScalingFit } from '../../../shared/stats/types';
 import { relativeError } from './reference';
 import { fitOne, pointsOf } from './support';
+
+// Random cases may wait for a processor that others use.
+vi.setConfig({ testTimeout: 60_000 });
 
 /** Points about a line with enough spread that 1e-9 is fair to ask of sums in another order. */
 const clouds = fc.array(
