@@ -5,16 +5,17 @@ import type { ScalingFit } from '../../../shared/stats/types';
 /**
  * One fit in the shape of the public answer.
  * @param fit a fit of shared/stats, raw units, log10–log10
- * @returns the same numbers; `design` holds what a figure needs to draw line and bands, null where there is no line
+ * @returns the same numbers; without the diagnostics that it does not carry
  */
 export function toFitAnswer(fit: ScalingFit): ScalingFitAnswer {
-  const { line, level: _level, ...rest } = fit;
+  const { level: _level, ...rest } = fit;
   return {
     ...rest,
+    // A group that is empty has no range, and JSON no infinity.
+    xRange: fit.n === 0 ? null : fit.xRange,
     tests: fit.tests.map(({ exponent, statistic, df, p }) => ({ exponent, statistic, df, p })),
     predictions: fit.predictions === null ? null : fit.predictions.map(({ log10Estimate: _log10, ...prediction }) => prediction),
     points: fit.points.map(({ internallyStudentised: _internal, dffits: _dffits, ...point }) => point),
-    design: line === null ? null : { meanLog10X: line.meanLog10X, sxx: line.sxx, tCritical: line.tCritical, level: line.level },
   };
 }
 
