@@ -4,4 +4,6 @@ export const killPointNames = [
   'submit:rows-written',
   'decide:decision-written',
   'decide:records-written',
+  'fits:computed',
+  'fits:stored',
 ] as const;
