@@ -11,7 +11,7 @@ import type { FigureMarkProps, MarkLook } from './figureMarkProps';
 import { FigureOverlay, FigureSelection } from './FigureOverlay';
 import type { FigureAxis, FigureGroup, PlacedPoint } from './figureTypes';
 import { bandPoints, lineEnds } from './geometry';
-import type { Frame } from './logScale';
+import { xPx, yPx, type Frame } from './logScale';
 import { decadeText, logTicks } from './ticks';
 import { spokenPoint } from './valueText';
 
@@ -57,10 +57,10 @@ export const FigureChart = memo(function FigureChart({ title, x, y, groups, show
   const marks = points.map((point) => ({ x: point.x, y: point.y, point }));
   const overlay = (
     <>
+      {selected ? <FigureSelection frame={frame} point={selected} x={x} y={y} radius={radius} fontSize={fontSize - 1} /> : null}
       <FigureOverlay frame={frame} labels={layout.labels} diagonals={layout.diagonals} flagged={points.filter((point) => point.flag)} specs={specs} radius={radius} fontSize={fontSize} />
       <AxisTitle text={y.unit ? `${y.label}, ${y.unit}` : y.label} fill={colour[y.tone]} x={Math.max(0, frame.left - 58)} y={frame.top - 11} anchor="start" fontSize={fontSize} />
       <AxisTitle text={x.unit ? `${x.label}, ${x.unit}` : x.label} fill={colour[x.tone]} x={frame.left + frame.width} y={frame.top + frame.height + 52} anchor="end" fontSize={fontSize} />
-      {selected ? <FigureSelection frame={frame} point={selected} x={x} y={y} radius={radius} fontSize={fontSize - 1} /> : null}
     </>
   );
   return (
@@ -73,8 +73,8 @@ export const FigureChart = memo(function FigureChart({ title, x, y, groups, show
       style={{ background: { fill: colour.sheet } }}
       containerComponent={<VictoryContainer responsive={false} role="group" title={title} desc={`${points.length} points in ${groups.length} clades; arrow keys go from point to point`} style={{ touchAction: 'pan-y' }} />}
     >
-      {axis(frame.x, false)}
-      {axis(frame.y, true)}
+      {axis(frame.x, false, selected ? (value) => Math.abs(xPx(frame, value) - selected.px) < 52 : keepAll)}
+      {axis(frame.y, true, selected ? (value) => Math.abs(yPx(frame, value) - selected.py) < 18 : keepAll)}
       {layout.diagonals.map(({ density, from, to }) => (
         <VictoryLine key={`diagonal ${density}`} data={[from, to].map((place) => fromPx(frame, place))} style={{ data: { stroke: colour.tick, strokeWidth: 1.3, strokeDasharray: '0.1 5', strokeLinecap: 'round' } }} />
       ))}
@@ -88,7 +88,7 @@ export const FigureChart = memo(function FigureChart({ title, x, y, groups, show
     </VictoryChart>
   );
 
-  function axis(range: Frame['x'], dependent: boolean) {
+  function axis(range: Frame['x'], dependent: boolean, isCovered: (value: number) => boolean) {
     const { major, minor } = logTicks(range[0], range[1]);
     const line = { stroke: colour.ink, strokeWidth: 1.4 };
     return [
@@ -103,7 +103,7 @@ export const FigureChart = memo(function FigureChart({ title, x, y, groups, show
         key={`major ${dependent}`}
         dependentAxis={dependent}
         tickValues={major}
-        tickFormat={(value: number) => decadeText(value)}
+        tickFormat={(value: number) => (isCovered(value) ? '' : decadeText(value))}
         style={{
           axis: line,
           grid: { stroke: colour.hairline, strokeWidth: 1 },
@@ -121,6 +121,11 @@ export const FigureChart = memo(function FigureChart({ title, x, y, groups, show
     return <VictoryArea key={`${kind} ${group.key}`} data={data.map(({ x: at, lower, upper }) => ({ x: at, y: upper, y0: lower }))} style={{ data: { fill, fillOpacity: opacity, stroke: 'none' } }} />;
   }
 });
+
+/** No value stands over the decades' names. */
+function keepAll(): boolean {
+  return false;
+}
 
 function ends([from, to]: readonly [number, number]): [number, number] {
   return [10 ** from, 10 ** to];

@@ -1,5 +1,6 @@
 import { Link, type Href } from 'expo-router';
-import { Pressable, Text as NativeText, View, type PressableStateCallbackType, type StyleProp, type ViewStyle } from 'react-native';
+import { useState } from 'react';
+import { Pressable, StyleSheet, Text as NativeText, View, type StyleProp, type ViewStyle } from 'react-native';
 import { useTheme, type Theme } from '../theme/ThemeProvider';
 import { radius, target } from '../theme/tokens';
 import { fontFamily } from '../theme/typography';
@@ -61,9 +62,11 @@ export function Button({ label, kind = 'secondary', onPress, href, disabled = fa
   const { wide } = useBreakpoint();
   const height = pad ? target.pad : wide ? target.wide : kind === 'quiet' ? target.phone : target.primaryPhone;
   const word = wordTone(kind, theme, disabled);
-  const look = (state: PressableStateCallbackType) => {
-    const hovered = 'hovered' in state && Boolean(state.hovered);
-    return [
+  const [pressed, setPressed] = useState(false);
+  const [hovered, setHovered] = useState(false);
+  const states = { onPressIn: () => setPressed(true), onPressOut: () => setPressed(false), onHoverIn: () => setHovered(true), onHoverOut: () => setHovered(false) };
+  // One plain object: a link that hands its props to the Pressable would lose a style function or list.
+  const look = StyleSheet.flatten([
       {
         minHeight: height,
         paddingHorizontal: kind === 'quiet' ? 8 : 16,
@@ -76,10 +79,9 @@ export function Button({ label, kind = 'secondary', onPress, href, disabled = fa
         gap: 8,
         flexGrow: grow ? 1 : 0,
       },
-      frame(kind, theme, state.pressed || hovered, disabled),
+      frame(kind, theme, pressed || hovered, disabled),
       style,
-    ];
-  };
+  ]);
   const content = (
     <>
       {working && <ProgressTicks colour={word} progress={progress} />}
@@ -96,7 +98,7 @@ export function Button({ label, kind = 'secondary', onPress, href, disabled = fa
   if (href !== undefined && !disabled) {
     return (
       <Link href={href} asChild>
-        <Pressable role="link" aria-label={spokenLabel} style={look}>
+        <Pressable role="link" aria-label={spokenLabel} style={look} {...states}>
           {content}
         </Pressable>
       </Link>
@@ -111,6 +113,7 @@ export function Button({ label, kind = 'secondary', onPress, href, disabled = fa
       disabled={disabled}
       onPress={working ? undefined : onPress}
       style={look}
+      {...states}
     >
       {content}
     </Pressable>

@@ -64,12 +64,14 @@ export function Table<Item>(props: TableProps<Item>) {
   if (stacked) return <StackedTable {...props} />;
   const columns = wide ? props.columns : props.columns.filter((column) => column.phone !== 'hide');
   return (
-    <Element as="table" css={tableCss} attributes={{ 'aria-label': props.caption }} nativeStyle={{ borderTopColor: colour.ink }}>
-      <TableHead columns={columns} sort={props.sort} onSort={props.onSort} />
-      <Element as="tbody">
-        {props.rows.map((item) => (
-          <TableRow key={props.rowKey(item)} item={item} columns={columns} href={props.rowHref?.(item) ?? null} current={props.rowKey(item) === props.currentKey} dense={props.dense} />
-        ))}
+    <Element as="div" css={{ maxWidth: '100%', overflowX: 'auto' }}>
+      <Element as="table" css={tableCss} attributes={{ 'aria-label': props.caption }} nativeStyle={{ borderTopColor: colour.ink }}>
+        <TableHead columns={columns} sort={props.sort} onSort={props.onSort} />
+        <Element as="tbody">
+          {props.rows.map((item) => (
+            <TableRow key={props.rowKey(item)} item={item} columns={columns} href={props.rowHref?.(item) ?? null} current={props.rowKey(item) === props.currentKey} dense={props.dense} />
+          ))}
+        </Element>
       </Element>
     </Element>
   );

@@ -1,6 +1,7 @@
 import { Pressable } from 'react-native';
 import { useTheme } from '../theme/ThemeProvider';
 import { fontFamily } from '../theme/typography';
+import { useBreakpoint } from '../layout/useBreakpoint';
 import { Element } from './Element';
 import type { TableColumn, TableProps, TableSort } from './Table';
 import { Text } from './Text';
@@ -16,6 +17,7 @@ interface TableHeadProps<Item> {
 /** Heads of the columns over a line in ink. */
 export function TableHead<Item>({ columns, sort, onSort, sticky }: TableHeadProps<Item>) {
   const { colour } = useTheme();
+  const { wide } = useBreakpoint();
   return (
     <Element as="thead" nativeStyle={{ flexDirection: 'row' }}>
       <Element as="tr">
@@ -30,14 +32,14 @@ export function TableHead<Item>({ columns, sort, onSort, sticky }: TableHeadProp
                 textAlign: column.align === 'end' ? 'right' : 'left',
                 verticalAlign: 'bottom',
                 width: column.width,
-                padding: edgePadding(index, columns.length, 6),
+                padding: edgePadding(index, columns.length, 6, wide),
                 fontFamily: fontFamily('sans'),
                 fontWeight: 'normal',
                 boxShadow: `inset 0 -1px 0 ${colour.ink}`,
                 ...(sticky ? { position: 'sticky', top: 0, zIndex: 2, background: colour.ground } : null),
               }}
             >
-              <HeadWords column={column} sorted={sorted} onSort={onSort} />
+              <HeadWords column={column} sorted={sorted} onSort={onSort} wide={wide} />
             </Element>
           );
         })}
@@ -46,7 +48,7 @@ export function TableHead<Item>({ columns, sort, onSort, sticky }: TableHeadProp
   );
 }
 
-function HeadWords<Item>({ column, sorted, onSort }: { column: TableColumn<Item>; sorted?: TableSort['direction']; onSort?: TableProps<Item>['onSort'] }) {
+function HeadWords<Item>({ column, sorted, onSort, wide }: { column: TableColumn<Item>; sorted?: TableSort['direction']; onSort?: TableProps<Item>['onSort']; wide: boolean }) {
   if (column.headContent) {
     return (
       <>
@@ -56,7 +58,7 @@ function HeadWords<Item>({ column, sorted, onSort }: { column: TableColumn<Item>
     );
   }
   const words = (
-    <Text size="secondary" tone={column.tone ?? 'inkSoft'} weight={column.tone || sorted ? 'semibold' : 'regular'} nowrap={column.nowrap}>
+    <Text size="secondary" tone={column.tone ?? 'inkSoft'} weight={column.tone || sorted ? 'semibold' : 'regular'} nowrap={column.nowrap && wide}>
       {column.head}
       {sorted ? (sorted === 'ascending' ? ' ↑' : ' ↓') : ''}
     </Text>
@@ -70,6 +72,7 @@ function HeadWords<Item>({ column, sorted, onSort }: { column: TableColumn<Item>
 }
 
 /** Cell padding: the outer edges of a table stand flush with the text around it. */
-export function edgePadding(index: number, count: number, vertical: number): string {
-  return `${vertical}px ${index === count - 1 ? 0 : 10}px ${vertical}px ${index === 0 ? 0 : 10}px`;
+export function edgePadding(index: number, count: number, vertical: number, wide: boolean): string {
+  const between = wide ? 10 : 5;
+  return `${vertical}px ${index === count - 1 ? 0 : between}px ${vertical}px ${index === 0 ? 0 : between}px`;
 }

@@ -3,6 +3,7 @@ import type { Ref } from 'react';
 import { useTheme } from '../theme/ThemeProvider';
 import { row as rowHeight } from '../theme/tokens';
 import { fontFamily } from '../theme/typography';
+import { useBreakpoint } from '../layout/useBreakpoint';
 import { CellContent } from './CellContent';
 import { Element } from './Element';
 import type { TableColumn } from './Table';
@@ -23,6 +24,7 @@ interface TableRowProps<Item> {
 /** One row of a table: first cell is its head and holds the link, a hairline below. */
 export function TableRow<Item>({ item, columns, href, current, dense, rowIndex, elementRef }: TableRowProps<Item>) {
   const { colour } = useTheme();
+  const { wide } = useBreakpoint();
   return (
     <Element
       as="tr"
@@ -41,7 +43,7 @@ export function TableRow<Item>({ item, columns, href, current, dense, rowIndex, 
             css={{
               textAlign: column.align === 'end' ? 'right' : 'left',
               verticalAlign: 'middle',
-              padding: edgePadding(index, columns.length, 3),
+              padding: edgePadding(index, columns.length, 3, wide),
               fontFamily: fontFamily('sans'),
               fontWeight: 'normal',
               whiteSpace: column.nowrap ? 'nowrap' : undefined,
