@@ -46,13 +46,16 @@ function specimenKey(row: RecordRow): string | null {
   return [row.specimen ?? row.number, ...row.pooledWith].sort().join(' + ');
 }
 
+/** A name kept at genus level stands for one species that nobody named: it enters fits, marked; a name that fits several species never does. */
+const isGenusLevel = (row: RecordRow): boolean => row.qualifier === 'sp.' || row.species.endsWith(' sp.');
+
 function toMeanInput(row: RecordRow): MeanInput {
   return {
     recordNumber: row.number,
     taxonSlug: row.taxonSlug,
-    // A name that stands for no one species enters no mean; formSpeciesMeans knows it by the empty name.
-    speciesName: row.named ? row.species : '',
-    marks: { domestic: row.origin === 'domestic', strain: row.origin === 'strain', hybrid: row.qualifier === 'hybrid', genusLevel: row.qualifier === 'sp.', demonstration: row.demonstration },
+    // What enters no mean is known to formSpeciesMeans by an empty name.
+    speciesName: row.named || isGenusLevel(row) ? row.species : '',
+    marks: { domestic: row.origin === 'domestic', strain: row.origin === 'strain', hybrid: row.qualifier === 'hybrid', genusLevel: isGenusLevel(row), demonstration: row.demonstration },
     sourceKey: row.sourceKey,
     sourceKind: row.kind,
     specimenKey: specimenKey(row),
