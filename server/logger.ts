@@ -14,6 +14,18 @@ const redactedPaths = secretFields.flatMap((field) => {
 const mailAddress = /[A-Za-z0-9._%+-]+@[A-Za-z0-9-]+(?:\.[A-Za-z0-9-]+)+/g;
 const secretInAddress = /([?&](?:token|key|code|secret)=)[^&"\s\\]+/gi;
 
+/** A failed query repeats its parameters, which may be a session or a password's hash; this is how they stand in a line. */
+const queryParameters = /\\nparams:(?:[^"\\]|\\[^n]|\\n(?!\s+at ))*/g;
+
+/** A serialised error, and the errors that caused it, without the list of a query's parameters. */
+function withoutParameters(serialised: object): object {
+  return Object.fromEntries(
+    Object.entries(serialised)
+      .filter(([name]) => !['params', 'parameters', 'raw'].includes(name))
+      .map(([name, value]: [string, unknown]) => [name, typeof value === 'object' && value !== null && !Array.isArray(value) ? withoutParameters(value) : value]),
+  );
+}
+
 /**
  * Structured logs, one JSON object a line. Redaction by name catches what we log on purpose; the last
  * hook also catches a mail address or a token that an error message of a library carries in its text.
@@ -24,8 +36,9 @@ export function createLogger(level: string, destination?: DestinationStream): Lo
       level,
       base: null,
       timestamp: pino.stdTimeFunctions.isoTime,
+      serializers: { err: (error: Error) => (error instanceof Error ? withoutParameters(pino.stdSerializers.errWithCause(error)) : error) },
       redact: { paths: redactedPaths, censor: '[removed]' },
-      hooks: { streamWrite: (line) => line.replace(mailAddress, '[mail address]').replace(secretInAddress, '$1[removed]') },
+      hooks: { streamWrite: (line) => line.replace(queryParameters, '').replace(mailAddress, '[mail address]').replace(secretInAddress, '$1[removed]') },
     },
     ...(destination === undefined ? [] : [destination]),
   );
@@ -47,6 +60,7 @@ export function requestLogger(logger: Logger): RequestHandler {
       return id;
     },
     serializers: {
+      err: withoutParameters,
       req: (request: { id: string; method: string; url: string }) => ({ id: request.id, method: request.method, path: request.url.split('?')[0] }),
       res: (response: { statusCode: number }) => ({ statusCode: response.statusCode }),
     },
