@@ -33,9 +33,14 @@ async function identityFor(home) {
 async function choosePlace(home) {
   const fallback = join('/var/tmp', `allokarya-${createHash('sha256').update(home).digest('hex').slice(0, 16)}`);
   if (existsSync(join(home, 'complete')) || !isRoot()) return home;
-  if (existsSync(fallback)) return fallback;
+  const postgres = await userIds('postgres');
+  if (existsSync(fallback)) {
+    // Anyone may write in /var/tmp: a folder there is ours only when its owner says so.
+    if (statSync(fallback).uid !== postgres.uid) throw new StopError(`${fallback} does not belong to the user postgres: remove it and start again.`);
+    return fallback;
+  }
   mkdirSync(dirname(home), { recursive: true });
-  const entered = await capture('test', ['-x', dirname(home)], { ...(await userIds('postgres')), cwd: '/' });
+  const entered = await capture('test', ['-x', dirname(home)], { ...postgres, cwd: '/' });
   return entered.code === 0 ? home : fallback;
 }
 
