@@ -57,7 +57,7 @@ async function browser(env) {
   const report = join(logs, 'browser.json');
   const log = join(logs, 'browser.log');
   rmSync(report, { force: true });
-  const code = await runLogged(bin('playwright'), ['test', '--reporter=list,json'], { log, env: { ...process.env, NO_COLOR: '1', PLAYWRIGHT_JSON_OUTPUT_NAME: report, ...env } });
+  const code = await runLogged(bin('playwright'), ['test', '--reporter=list,json'], { log, env: { ...process.env, FORCE_COLOR: '0', PLAYWRIGHT_JSON_OUTPUT_NAME: report, ...env } });
   return settle(code, readReport(report), countPlaywright, log);
 }
 
