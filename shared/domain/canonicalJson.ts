@@ -25,7 +25,7 @@ export function canonicalJson(value: unknown): string {
 
 function canonicalString(text: string): string {
   // A lone surrogate has no UTF-8 form, so its bytes could not be checked.
-  if (/[\ud800-\udbff](?![\udc00-\udfff])|(?<![\ud800-\udbff])[\udc00-\udfff]/.test(text)) {
+  if (/\p{Surrogate}/u.test(text)) {
     throw new RangeError('Canonical JSON holds no lone surrogate.');
   }
   return JSON.stringify(text);
