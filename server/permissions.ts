@@ -17,6 +17,7 @@ export const permissions = {
   'ask-recheck': ['reviewer', 'curator'],
   'answer-recheck': ['contributor'],
   'close-recheck': ['reviewer', 'curator'],
+  'propose-taxon': ['contributor', 'curator'],
   curate: ['curator'],
   'agree-to-freeze': ['curator', 'administrator'],
   'read-audit': ['curator', 'administrator'],

@@ -6,6 +6,8 @@ import { labRoutes } from './labs';
 import { meRoutes } from './me';
 import { outboxRoutes } from './outbox';
 import { peopleRoutes } from './people';
+import { taxonRoutes } from './taxa';
+import { vocabularyRoutes } from './vocabularies';
 
 /** Every endpoint of the API. A test walks this list and fails where the role table has no row for one. */
-export const routes: readonly Route[] = [...healthRoutes, ...calculatorRoutes, ...meRoutes, ...peopleRoutes, ...labRoutes, ...auditRoutes, ...outboxRoutes];
+export const routes: readonly Route[] = [...healthRoutes, ...calculatorRoutes, ...meRoutes, ...peopleRoutes, ...labRoutes, ...auditRoutes, ...outboxRoutes, ...taxonRoutes, ...vocabularyRoutes];

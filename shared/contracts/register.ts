@@ -76,6 +76,10 @@ export type Taxon = z.infer<typeof taxonSchema>;
 export const taxaQuerySchema = z.object({ query: z.string().max(200).default(''), rank: z.string().max(40).optional(), status: z.enum(['proposed', 'accepted', 'refused']).optional(), ...pageQuery });
 export const taxonProposalSchema = z.object({ name: z.string().trim().min(3).max(120), rank: z.string().trim().min(3).max(40), parent: z.string().trim().min(1).max(120), authority: z.string().trim().max(400).default(''), demonstration: z.boolean().default(false) });
 export const taxonDecisionSchema = z.object({ decision: z.enum(['accept', 'refuse']), reason: z.string().trim().max(1000).default('') });
+/** A former or alternative name; its address leads on to the taxon. */
+export const synonymCreateSchema = z.object({ name: z.string().trim().min(3).max(120), reason: z.string().trim().min(1, 'Say where the name is used, or since when it is not').max(1000) });
+/** A phylogeny as lists show it. */
+export const treeItemSchema = z.object({ id: z.string(), name: z.string(), tips: z.number().int(), dated: z.boolean(), source: z.string().nullable() });
 
 export const speciesQuerySchema = z.object({
   query: z.string().max(200).default(''),

@@ -1,10 +1,11 @@
 import type { Context } from '../../server/context';
-import { seedPublished } from '../../server/seed/published';
 import { seedVocabularies } from '../../server/seed/vocabularies';
 
 /** Fills a template database as the first start does, without the demonstration. */
 export async function seedTemplate(seed: 'vocabularies' | 'published', context: Context, runJobs: () => Promise<void>): Promise<void> {
   await seedVocabularies(context);
-  if (seed === 'published') await seedPublished(context);
+  if (seed === 'vocabularies') return;
+  const { seedPublished } = await import('../../server/seed/published');
+  await seedPublished(context);
   await runJobs();
 }
