@@ -1,0 +1,7 @@
+import { useLocalSearchParams } from 'expo-router';
+import { ReviewScreen } from '../../../components/review/ReviewScreens';
+
+export default function ReviewRoute() {
+  const { id } = useLocalSearchParams<{ id: string }>();
+  return <ReviewScreen id={id} />;
+}

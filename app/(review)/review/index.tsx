@@ -1,0 +1,5 @@
+import { ReviewQueueScreen } from '../../../components/review/ReviewScreens';
+
+export default function ReviewQueueRoute() {
+  return <ReviewQueueScreen />;
+}
