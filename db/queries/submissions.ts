@@ -1,9 +1,9 @@
-import { and, asc, desc, eq, inArray, isNotNull, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, gte, inArray, isNotNull, isNull, lte, or, sql } from 'drizzle-orm';
 import type { CheckResult } from '../../shared/contracts/checks';
 import type { SubmissionContent } from '../../shared/contracts/content';
 import type { DecisionKind, RevisionStatus } from '../../shared/contracts/vocabulary';
 import type { Queryable, Transaction } from '../client';
-import { comments, decisions, labs, submissionEvents, submissionRevisions, submissions, users } from '../schema/index';
+import { comments, decisions, labMemberships, labs, submissionEvents, submissionRevisions, submissions, userRoles, users } from '../schema/index';
 
 export type SubmissionRow = NonNullable<Awaited<ReturnType<typeof findSubmission>>>;
 export type RevisionRow = typeof submissionRevisions.$inferSelect;
@@ -175,4 +175,33 @@ export async function findSubmitters(db: Queryable, submissionId: string): Promi
     .where(and(eq(submissionRevisions.submissionId, submissionId), isNotNull(submissionRevisions.submittedBy)))
     .orderBy(asc(submissionRevisions.revision));
   return rows.filter((row, index) => rows.findIndex((other) => other.id === row.id) === index);
+}
+
+/** Contributors who are members of a lab on a day (ISO). */
+export async function findContributorsOfLab(db: Queryable, labId: string, day: string): Promise<string[]> {
+  const rows = await db
+    .selectDistinct({ id: labMemberships.userId })
+    .from(labMemberships)
+    .innerJoin(userRoles, and(eq(userRoles.userId, labMemberships.userId), eq(userRoles.role, 'contributor')))
+    .where(and(eq(labMemberships.labId, labId), lte(labMemberships.fromDay, day), or(isNull(labMemberships.untilDay), gte(labMemberships.untilDay, day))));
+  return rows.map((row) => row.id);
+}
+
+/** People as others see them: name and lab of the day, by id. */
+export async function findPersonRefs(db: Queryable, userIds: readonly string[], day: string): Promise<Map<string, { id: string; name: string; lab: string | null }>> {
+  const wanted = [...new Set(userIds)];
+  if (wanted.length === 0) return new Map();
+  const rows = await db
+    .select({ id: users.id, name: users.name, lab: labs.name })
+    .from(users)
+    .leftJoin(labMemberships, and(eq(labMemberships.userId, users.id), lte(labMemberships.fromDay, day), or(isNull(labMemberships.untilDay), gte(labMemberships.untilDay, day))))
+    .leftJoin(labs, eq(labs.id, labMemberships.labId))
+    .where(inArray(users.id, wanted))
+    .orderBy(asc(labMemberships.fromDay));
+  return new Map(rows.map((row) => [row.id, row]));
+}
+
+export async function findLabDemonstration(db: Queryable, labId: string): Promise<boolean> {
+  const [row] = await db.select({ demonstration: labs.demonstration }).from(labs).where(eq(labs.id, labId));
+  return row?.demonstration ?? false;
 }

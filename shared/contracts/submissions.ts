@@ -52,7 +52,9 @@ export const previewSchema = z.object({
   checks: z.array(checkResultSchema),
 });
 export type Preview = z.infer<typeof previewSchema>;
-export const previewRequestSchema = z.object({ content: submissionContentSchema });
+/** `submissionId`: the submission that the content belongs to, so that its own code is not held against it. */
+export const previewRequestSchema = z.object({ content: submissionContentSchema, submissionId: z.uuid().nullish() });
+export const reviseSchema = z.object({ recheckId: z.uuid().nullish() });
 
 export const attachmentSchema = z.object({
   id: z.string(),
