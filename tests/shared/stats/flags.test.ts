@@ -78,13 +78,27 @@ describe('the forward search', () => {
   });
 
   it('decides ties in distance alike in every unit and order', () => {
-    // Steps of 0.1 in log10 x and three levels of y: many points are equally far from the line.
-    const logX = [0, -0.39, 0.68, 0.3, 0.4, 0.5, 0.6, 0.7, 0.8, 0.9, 1, 1.1];
-    const logY = [0.3, 0.007, 0.737, 0.3, 0.025, 0.4, 0.3, 0.35, 0.4, 0.3, 0.35, 0.4];
-    const inUnits = (shift: number): boolean[] => searchForward(logX.map((v) => v + shift), logY)!.outside;
-    for (const shift of [-6, 0.3, 9]) expect(inUnits(shift)).toEqual(inUnits(0));
-    const turned = searchForward([...logX].reverse(), [...logY].reverse())!.outside.reverse();
-    expect(turned).toEqual(inUnits(0));
+    // Whole steps in x and y: many points are equally far from the line, and rounding differs by unit.
+    const uniform = uniforms(17);
+    const spoken = Array.from({ length: 300 }, () => {
+      const x = Array.from({ length: 12 }, (_, i) => i / 10);
+      const y = x.map((v) => v + [0, 0.1, -0.1, 0.3, -0.4][Math.floor(uniform() ** 3 * 5)]!);
+      const found = searchForward(x, y)!.outside;
+      expect(searchForward(x.map((v) => v - 6.1), y.map((v) => v + 0.7))!.outside).toEqual(found);
+      expect(searchForward([...x].reverse(), [...y].reverse())!.outside.reverse()).toEqual(found);
+      return found.includes(true);
+    });
+    expect(spoken.filter(Boolean).length).toBeGreaterThan(20);
+  });
+
+  it('measures points inside by their internally studentised residual', () => {
+    const uniform = uniforms(9);
+    const { x, y } = cleanSample(20, uniform, normals(uniform));
+    const search = searchForward(x, y)!;
+    expect(search.outside).not.toContain(true);
+    const fit = fitOne(pointsOf(x.map((v) => 10 ** v), y.map((v) => 10 ** v)));
+    search.distances.forEach((distance, i) => expect(distance).toBeCloseTo(fit.points[i]!.internallyStudentised!, 9));
+    expect(search.exponent).toBeCloseTo(fit.exponent!.estimate, 9);
   });
 
   it('refuses an alpha outside 0…1', () => {

@@ -89,6 +89,16 @@ describe('the standardised major axis', () => {
     }), { seed: 4, numRuns: 100 });
   });
 
+  it('mirrors exponent and limits when y falls instead of rising', () => {
+    fc.assert(fc.property(clouds, (points) => {
+      const rising = fitOne(points, 'sma').exponent!;
+      const falling = fitOne(points.map(({ id, x, y }) => ({ id, x, y: 1 / y })), 'sma').exponent!;
+      expect(close(falling.estimate, -rising.estimate)).toBe(true);
+      expect(close(falling.lower, -rising.upper)).toBe(true);
+      expect(close(falling.upper, -rising.lower)).toBe(true);
+    }), { seed: 8, numRuns: 30 });
+  });
+
   it('is the least-squares exponent divided by r', () => {
     fc.assert(fc.property(clouds, (points) => {
       const ols = fitOne(points, 'ols');
