@@ -37,6 +37,7 @@ export const settingsTable: readonly Setting[] = [
   { name: 'WEB_DIST', default: 'dist', meaning: 'the folder of the exported web client' },
   { name: 'KARYA_FIRST_ACCOUNT_FILE', default: 'none', meaning: 'the file that receives the one-time link of the first account outside demo mode; npm start sets it' },
   { name: 'KARYA_KILL_AT', default: 'none', meaning: 'only with NODE_ENV=test: the named point at which the process kills itself' },
+  { name: 'KARYA_KILL_LOG', default: 'none', meaning: 'only with NODE_ENV=test: the file that receives the name of the point once it is reached' },
 ];
 
 const wholeNumber = (lowest: number, highest: number, fallback: number) =>
@@ -75,6 +76,7 @@ const environmentSchema = z.object({
   WEB_DIST: z.string().default('dist'),
   KARYA_FIRST_ACCOUNT_FILE: z.string().optional(),
   KARYA_KILL_AT: z.string().optional(),
+  KARYA_KILL_LOG: z.string().optional(),
 });
 
 type Settings = z.infer<typeof environmentSchema>;
@@ -98,6 +100,8 @@ export interface Config {
   firstAccountFile: string | undefined;
   /** The named point at which a test lets the process die; undefined outside tests. */
   killAt: string | undefined;
+  /** Where the name of that point is noted once it is reached. */
+  killLog: string | undefined;
 }
 
 /** A setting is wrong: the message is one sentence per problem, for the person who starts the server. */
@@ -146,7 +150,9 @@ export function loadConfig(environment: Record<string, string | undefined>): Con
   const problems: string[] = [];
   const notLoopback = demo ? isLoopback(settings) : undefined;
   if (notLoopback !== undefined) problems.push(notLoopback);
-  if (settings.KARYA_KILL_AT !== undefined && settings.NODE_ENV !== 'test') problems.push(`KARYA_KILL_AT is "${settings.KARYA_KILL_AT}"; expected is none, because it is for tests only.`);
+  for (const name of ['KARYA_KILL_AT', 'KARYA_KILL_LOG'] as const) {
+    if (settings[name] !== undefined && settings.NODE_ENV !== 'test') problems.push(`${name} is "${settings[name]}"; expected is none, because it is for tests only.`);
+  }
   if (problems.length > 0) throw new ConfigError(problems);
   return {
     environment: settings.NODE_ENV,
@@ -171,5 +177,6 @@ export function loadConfig(environment: Record<string, string | undefined>): Con
     webDist: settings.WEB_DIST,
     firstAccountFile: settings.KARYA_FIRST_ACCOUNT_FILE,
     killAt: settings.KARYA_KILL_AT,
+    killLog: settings.KARYA_KILL_LOG,
   };
 }
