@@ -54,7 +54,7 @@ export function ScalingFigure(props: ScalingFigureProps) {
     const points = placePoints(groups, frame);
     const labels = placeFigureLabels(groups, points, frame, { fontSize, wide, radius });
     const what = [x, y].find((axis) => axis.kind === 'count')?.variable === 'cells' ? 'cells' : 'neurons';
-    const lines = diagonals === null ? [] : placeDiagonals(frame, x.variable, y.variable, what, obstaclesOf(points, labels, groups, frame), wide);
+    const lines = diagonals === null ? [] : placeDiagonals(frame, points, x.variable, y.variable, what, obstaclesOf(points, labels, groups, frame), wide);
     return { frame, height, points, labels, diagonals: lines, specs: assignCladeMarks(groups.map((group) => group.key)) };
   }, [groups, width, wanted, wide, fontSize, radius, x, y, diagonals]);
 

@@ -100,8 +100,8 @@ export interface PlacedDiagonal extends Diagonal {
 }
 
 /** Diagonals with their words where they cover least; on a phone without words. */
-export function placeDiagonals(frame: Frame, xVariable: string, yVariable: string, what: string, obstacles: readonly Box[], labelled: boolean): PlacedDiagonal[] {
-  return densityDiagonals(frame, xVariable, yVariable).map((diagonal) => {
+export function placeDiagonals(frame: Frame, points: readonly XY[], xVariable: string, yVariable: string, what: string, obstacles: readonly Box[], labelled: boolean): PlacedDiagonal[] {
+  return densityDiagonals(frame, points, xVariable, yVariable).map((diagonal) => {
     const text = `${powerText(Math.round(Math.log10(diagonal.density)))} ${what} per mg`;
     const half = textWidth(text, 13) / 2;
     const length = Math.hypot(diagonal.to.x - diagonal.from.x, diagonal.to.y - diagonal.from.y);

@@ -71,18 +71,34 @@ export interface Diagonal {
   to: XY;
 }
 
-/**
- * Lines of constant density (count ÷ mass in mg) across the frame, for a count against a mass in g or
- * the other way round; none for other pairs. In px. Short corners are left out.
- */
-export function densityDiagonals(frame: Frame, xVariable: string, yVariable: string): Diagonal[] {
+export interface DensityRange {
+  /** Least and greatest number per mg among the points. */
+  least: number;
+  greatest: number;
+}
+
+/** The densities of points of a count against a mass in g, or the other way round; null for other pairs. */
+export function densityRange(points: readonly XY[], xVariable: string, yVariable: string): DensityRange | null {
   const massOnCount = massVariables.has(yVariable) && countVariables.has(xVariable);
   const countOnMass = countVariables.has(yVariable) && massVariables.has(xVariable);
-  if (!massOnCount && !countOnMass) return [];
+  if (points.length === 0 || !(massOnCount || countOnMass)) return null;
+  const densities = points.map(({ x, y }) => (massOnCount ? x / (1000 * y) : y / (1000 * x)));
+  return { least: Math.min(...densities), greatest: Math.max(...densities) };
+}
+
+/**
+ * Lines of constant density (count ÷ mass in mg) across the frame, for a count against a mass in g or
+ * the other way round, at the powers of ten that enclose the points' own densities; none for other pairs.
+ * In px. Short corners are left out.
+ */
+export function densityDiagonals(frame: Frame, points: readonly XY[], xVariable: string, yVariable: string): Diagonal[] {
+  const massOnCount = massVariables.has(yVariable) && countVariables.has(xVariable);
+  const range = densityRange(points, xVariable, yVariable);
+  if (!range) return [];
   // log10 y = log10 x + offset, with offset = −3 − log10 d (mass on count) or 3 + log10 d (count on mass).
   const offsetOf = (power: number) => (massOnCount ? -3 - power : 3 + power);
   const result: Diagonal[] = [];
-  for (let power = -3; power <= 8; power += 1) {
+  for (let power = Math.floor(Math.log10(range.least)); power <= Math.ceil(Math.log10(range.greatest)); power += 1) {
     const offset = offsetOf(power);
     const from = Math.max(frame.x[0], frame.y[0] - offset);
     const to = Math.min(frame.x[1], frame.y[1] - offset);

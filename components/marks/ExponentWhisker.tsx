@@ -2,6 +2,7 @@ import { View } from 'react-native';
 import Svg, { Line } from 'react-native-svg';
 import { cladeMark, type CladeMarkSpec } from '../theme/cladeMarks';
 import { useTheme } from '../theme/ThemeProvider';
+import { useBreakpoint } from '../layout/useBreakpoint';
 import { Text } from '../ui/Text';
 import { MarkPath } from './CladeMark';
 
@@ -39,17 +40,18 @@ interface ExponentWhiskerProps extends Interval {
 }
 
 /** An exponent with its interval; thin lines stand at 1 and 1.5. */
-export function ExponentWhisker({ clade, spec = cladeMark(clade), before, scale = exponentScale, width = 96, height = 30, ...now }: ExponentWhiskerProps) {
+export function ExponentWhisker({ clade, spec = cladeMark(clade), before, scale = exponentScale, width: asked, height = 30, ...now }: ExponentWhiskerProps) {
+  const width = useWhiskerWidth(asked);
   const { colour, name } = useTheme();
   const xOf = xOfExponent(scale, width);
-  const clade1 = spec.colour[name];
+  const own = spec.colour[name];
   const lower = before ? height / 2 + 5 : height / 2;
   return (
     <Svg width={width} height={height} aria-hidden={true}>
       <Line x1={xOf(1)} x2={xOf(1)} y1={1} y2={height - 1} stroke={colour.hairline} strokeWidth={1} />
       <Line x1={xOf(1.5)} x2={xOf(1.5)} y1={1} y2={height - 1} stroke={colour.hairline} strokeWidth={1} strokeDasharray="2 3" />
       {before ? <Whisker xOf={xOf} interval={before} y={height / 2 - 5} stroke={colour.tick} spec={spec} fill={colour.sheet} hollow /> : null}
-      <Whisker xOf={xOf} interval={now} y={lower} stroke={clade1} spec={spec} fill={clade1} />
+      <Whisker xOf={xOf} interval={now} y={lower} stroke={own} spec={spec} fill={own} />
     </Svg>
   );
 }
@@ -84,8 +86,15 @@ function xOfExponent({ from, to }: ExponentScale, width: number): (exponent: num
   return (exponent) => inset + Math.min(1, Math.max(0, (exponent - from) / (to - from))) * (width - 2 * inset);
 }
 
+/** Whiskers and their axis share a width: narrower on a phone unless one is asked for. */
+function useWhiskerWidth(asked: number | undefined): number {
+  const { wide } = useBreakpoint();
+  return asked ?? (wide ? 96 : 72);
+}
+
 /** Head of a column of whiskers: the words 1 and 1.5 at their lines. */
-export function ExponentAxis({ scale = exponentScale, width = 96 }: { scale?: ExponentScale; width?: number }) {
+export function ExponentAxis({ scale = exponentScale, width: asked }: { scale?: ExponentScale; width?: number }) {
+  const width = useWhiskerWidth(asked);
   const xOf = xOfExponent(scale, width);
   return (
     <View style={{ width, height: 20 }} aria-hidden={true}>

@@ -5,7 +5,7 @@ import { row as rowHeight } from '../theme/tokens';
 import { CellContent } from './CellContent';
 import { Element } from './Element';
 import { Sign } from './Sign';
-import type { TableColumn, TableProps } from './Table';
+import type { TableColumn, TableProps } from './tableTypes';
 import { Text } from './Text';
 import { TextLink } from './TextLink';
 

@@ -1,57 +1,13 @@
-import type { Href } from 'expo-router';
-import type { ReactNode } from 'react';
 import { useTheme } from '../theme/ThemeProvider';
-import type { Tone } from '../theme/tokens';
 import { useBreakpoint } from '../layout/useBreakpoint';
 import { Element } from './Element';
 import { StackedTable } from './StackedTable';
 import { TableHead } from './TableHead';
 import { TableRow } from './TableRow';
+import { tableCss, type TableProps } from './tableTypes';
 import { VirtualTable } from './VirtualTable';
 
-export interface TableColumn<Item> {
-  key: string;
-  /** Words of the head; also the label of the value in stacked rows. */
-  head: string;
-  /** Drawn instead of the words (an axis); the words stay for ears. */
-  headContent?: ReactNode;
-  tone?: Tone;
-  align?: 'start' | 'end';
-  /** px or a CSS width. */
-  width?: number | string;
-  cell: (item: Item) => ReactNode;
-  /** In stacked rows: its own labelled line (default), over the full width, or left out. */
-  phone?: 'line' | 'full' | 'hide';
-  /** Can be sorted by, see `sort`. */
-  sortable?: boolean;
-  /** Cells do not break. */
-  nowrap?: boolean;
-}
-
-export interface TableSort {
-  key: string;
-  direction: 'ascending' | 'descending';
-}
-
-export interface TableProps<Item> {
-  /** Names the table for a screen reader. */
-  caption: string;
-  rows: readonly Item[];
-  columns: readonly TableColumn<Item>[];
-  rowKey: (item: Item) => string;
-  /** The whole row leads there; the link is in the first cell. */
-  rowHref?: (item: Item) => Href | null;
-  /** The row shown beside or above. */
-  currentKey?: string;
-  /** Rows of 34 px instead of 40. */
-  dense?: boolean;
-  /** On a phone: stacked rows (default), or still a table for few narrow columns (`phone: 'hide'` leaves columns out). */
-  phoneLayout?: 'stack' | 'table';
-  sort?: TableSort;
-  onSort?: (sort: TableSort) => void;
-  /** Height in px of the scrolling box above 100 rows; shorter tables grow with the page. */
-  boxHeight?: number;
-}
+export type { TableColumn, TableProps, TableSort } from './tableTypes';
 
 const MANY_ROWS = 100;
 
@@ -76,5 +32,3 @@ export function Table<Item>(props: TableProps<Item>) {
     </Element>
   );
 }
-
-export const tableCss = { width: '100%', borderCollapse: 'collapse', borderSpacing: 0 } as const;

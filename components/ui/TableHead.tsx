@@ -3,7 +3,7 @@ import { useTheme } from '../theme/ThemeProvider';
 import { fontFamily } from '../theme/typography';
 import { useBreakpoint } from '../layout/useBreakpoint';
 import { Element } from './Element';
-import type { TableColumn, TableProps, TableSort } from './Table';
+import { edgePadding, type TableColumn, type TableProps, type TableSort } from './tableTypes';
 import { Text } from './Text';
 import { VisuallyHidden } from './VisuallyHidden';
 
@@ -69,10 +69,4 @@ function HeadWords<Item>({ column, sorted, onSort, wide }: { column: TableColumn
       {words}
     </Pressable>
   );
-}
-
-/** Cell padding: the outer edges of a table stand flush with the text around it. */
-export function edgePadding(index: number, count: number, vertical: number, wide: boolean): string {
-  const between = wide ? 10 : 5;
-  return `${vertical}px ${index === count - 1 ? 0 : between}px ${vertical}px ${index === 0 ? 0 : between}px`;
 }

@@ -6,8 +6,7 @@ import { fontFamily } from '../theme/typography';
 import { useBreakpoint } from '../layout/useBreakpoint';
 import { CellContent } from './CellContent';
 import { Element } from './Element';
-import type { TableColumn } from './Table';
-import { edgePadding } from './TableHead';
+import { edgePadding, type TableColumn } from './tableTypes';
 import { TextLink } from './TextLink';
 
 interface TableRowProps<Item> {

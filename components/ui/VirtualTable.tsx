@@ -3,7 +3,7 @@ import { useRef } from 'react';
 import { row as rowHeight } from '../theme/tokens';
 import { Element } from './Element';
 import { StackedRow } from './StackedTable';
-import { tableCss, type TableProps } from './Table';
+import { tableCss, type TableProps } from './tableTypes';
 import { TableHead } from './TableHead';
 import { TableRow } from './TableRow';
 
