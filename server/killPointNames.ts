@@ -6,4 +6,8 @@ export const killPointNames = [
   'decide:records-written',
   'fits:computed',
   'fits:stored',
+  'freeze:rows-written',
+  'freeze:fits-written',
+  'freeze:files-stored',
+  'freeze:before-switch',
 ] as const;

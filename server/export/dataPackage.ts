@@ -20,7 +20,7 @@ function schemaOf({ columns, primaryKey, foreignKeys }: TableResource) {
   return {
     $schema: 'https://datapackage.org/profiles/2.0/tableschema.json',
     fields: columns.map(({ name, type, description, unit }) => ({ name, type, description, ...(unit === undefined ? {} : { unit }), ...(required.has(name) ? { constraints: { required: true } } : {}) })),
-    primaryKey,
+    ...(primaryKey.length === 0 ? {} : { primaryKey }),
     missingValues: [''],
     ...(foreignKeys.length === 0 ? {} : { foreignKeys: foreignKeys.map(({ fields, resource, referenced }) => ({ fields, reference: { resource, fields: referenced } })) }),
   };
