@@ -15,7 +15,8 @@ export const permissions = {
   'read-submission': ['contributor', 'reviewer', 'curator'],
   'read-rechecks': ['contributor', 'reviewer', 'curator'],
   'ask-recheck': ['reviewer', 'curator'],
-  'answer-recheck': ['contributor'],
+  /** A curator answers for records of publications, which have no laboratory. */
+  'answer-recheck': ['contributor', 'curator'],
   'close-recheck': ['reviewer', 'curator'],
   'propose-taxon': ['contributor', 'curator'],
   curate: ['curator'],
