@@ -1,5 +1,5 @@
 import { createHash, randomBytes } from 'node:crypto';
-import { chownSync, existsSync, mkdirSync, readFileSync, readlinkSync, realpathSync, renameSync, rmSync, statSync, truncateSync, writeFileSync } from 'node:fs';
+import { chownSync, existsSync, mkdirSync, readFileSync, readdirSync, readlinkSync, realpathSync, renameSync, rmSync, statSync, truncateSync, writeFileSync } from 'node:fs';
 import { createServer } from 'node:net';
 import { basename, dirname, join } from 'node:path';
 import { setTimeout as wait } from 'node:timers/promises';
@@ -57,6 +57,15 @@ export async function freePort() {
       probe.close(() => resolve(port));
     });
   });
+}
+
+/** Another user's cluster cannot be opened, and must not be taken for an absent one. */
+function checkAccess(place) {
+  try {
+    if (existsSync(place)) readdirSync(place);
+  } catch (error) {
+    throw new StopError(`The database folder ${place} belongs to another user (${error.code}): start as the user who made it, or let that user type "npm run reset".`);
+  }
 }
 
 async function initialise(place, binaries, identity) {
@@ -153,6 +162,7 @@ export async function openCluster({ home, disposable = false }) {
     const place = await choosePlace(home);
     const data = join(place, 'data');
     let state = 'running';
+    checkAccess(place);
     if (existsSync(data) && !existsSync(join(place, 'complete'))) {
       if (!disposable) throw new StopError(`The database folder ${place} is half made: "npm run reset" makes it anew.`);
       rmSync(place, { recursive: true, force: true });

@@ -25,16 +25,16 @@ function clientWith(changes: Partial<typeof credentials> = {}) {
 }
 
 /** What the client would send, with something changed after it was signed. */
-async function sendAltered(alter: (headers: Record<string, string>, body: Buffer) => { path?: string; body?: Buffer }) {
+async function sendAltered(alter: (headers: Record<string, string>, body: Buffer) => { path?: string; body?: Buffer }, uploaded: Buffer | Readable = Buffer.from('the evidence')) {
   const signing = clientWith();
   return await new Promise<{ status: number; text: string }>((resolve, reject) => {
     signing.middlewareStack.add(
-      () => (args) => {
-        const sent = args.request as { method: string; path: string; query: Record<string, string>; headers: Record<string, string>; body: Buffer };
+      () => async (args) => {
+        const sent = args.request as { method: string; path: string; query: Record<string, string>; headers: Record<string, string>; body: Buffer | Readable };
         const headers = { ...sent.headers };
-        const altered = alter(headers, sent.body);
-        const body = altered.body ?? sent.body;
-        headers['content-length'] = String(body.length);
+        const whole = Buffer.isBuffer(sent.body) ? sent.body : Buffer.concat(await sent.body.toArray());
+        const altered = alter(headers, whole);
+        const body = altered.body ?? whole;
         const outgoing = httpRequest(`${fake.url}${altered.path ?? sent.path}?${new URLSearchParams(sent.query).toString()}`, { method: sent.method, headers }, (answer) => {
           let text = '';
           answer.on('data', (part: Buffer) => (text += part.toString()));
@@ -46,7 +46,7 @@ async function sendAltered(alter: (headers: Record<string, string>, body: Buffer
       },
       { step: 'finalizeRequest', priority: 'low', name: 'altered' },
     );
-    signing.send(new PutObjectCommand({ Bucket, Key: 'evidence.pdf', Body: Buffer.from('the evidence') })).catch((error: Error) => {
+    signing.send(new PutObjectCommand({ Bucket, Key: 'evidence.pdf', Body: uploaded, ContentLength: 12 })).catch((error: Error) => {
       if (error.message !== 'sent by the test itself') reject(error);
     });
   });
@@ -91,6 +91,19 @@ describe('the local object storage', () => {
     const answer = await sendAltered((_headers, body) => ({ body: Buffer.from(body.toString().replace('evidence', 'Evidence')) }));
     expect(answer.status).toBe(400);
     expect(answer.text).toContain('XAmzContentSHA256Mismatch');
+  });
+
+  it('refuses a stream whose content does not fit the checksum behind it', async () => {
+    const stream = () => Readable.from([Buffer.from('the '), Buffer.from('evidence')]);
+    const declared: (string | undefined)[] = [];
+    const untouched = await sendAltered((headers) => {
+      declared.push(headers['x-amz-content-sha256']);
+      return {};
+    }, stream());
+    expect([untouched.status, declared]).toEqual([200, ['STREAMING-UNSIGNED-PAYLOAD-TRAILER']]);
+    const answer = await sendAltered((_headers, body) => ({ body: Buffer.from(body.toString('latin1').replace('evidence', 'Evidence'), 'latin1') }), stream());
+    expect(answer.status).toBe(400);
+    expect(answer.text).toContain('<Code>BadDigest</Code>');
   });
 
   it('refuses a request without a signature and one whose time is 16 minutes off', async () => {
