@@ -7,9 +7,11 @@ import { meRoutes } from './me';
 import { outboxRoutes } from './outbox';
 import { peopleRoutes } from './people';
 import { recheckRoutes } from './rechecks';
+import { recordRoutes } from './records';
 import { scalingRoutes } from './scaling';
+import { speciesRoutes } from './species';
 import { taxonRoutes } from './taxa';
 import { vocabularyRoutes } from './vocabularies';
 
 /** Every endpoint of the API. A test walks this list and fails where the role table has no row for one. */
-export const routes: readonly Route[] = [...healthRoutes, ...calculatorRoutes, ...scalingRoutes, ...meRoutes, ...peopleRoutes, ...labRoutes, ...auditRoutes, ...outboxRoutes, ...taxonRoutes, ...vocabularyRoutes, ...recheckRoutes];
+export const routes: readonly Route[] = [...healthRoutes, ...calculatorRoutes, ...scalingRoutes, ...speciesRoutes, ...recordRoutes, ...meRoutes, ...peopleRoutes, ...labRoutes, ...auditRoutes, ...outboxRoutes, ...taxonRoutes, ...vocabularyRoutes, ...recheckRoutes];
