@@ -102,7 +102,7 @@ export async function startLocalServices({ bundle, folder, given }) {
 /** 78 is how the server says that its last words are meant for the person at the terminal. */
 function endedEarly(launched) {
   if (launched.code === 78) return new StopError(launched.stderr.trim());
-  const words = launched.stderr.trim().split('\n').slice(-15).join('\n');
+  const words = launched.stderr.trim().split('\n').slice(-30).join('\n');
   return new StopError(`The server ended before it answered (${launched.code}).${words === '' ? '' : `\n${words}`}\nIts log is ${relative(root, launched.log)}.`);
 }
 
