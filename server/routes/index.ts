@@ -8,10 +8,15 @@ import { outboxRoutes } from './outbox';
 import { peopleRoutes } from './people';
 import { recheckRoutes } from './rechecks';
 import { recordRoutes } from './records';
+import { registerRoutes } from './register';
+import { reviewRoutes } from './review/review';
 import { scalingRoutes } from './scaling';
 import { speciesRoutes } from './species';
+import { attachmentRoutes } from './submissions/attachments';
+import { submissionCollectionRoutes } from './submissions/collection';
+import { submissionRoutes } from './submissions/submission';
 import { taxonRoutes } from './taxa';
 import { vocabularyRoutes } from './vocabularies';
 
 /** Every endpoint of the API. A test walks this list and fails where the role table has no row for one. */
-export const routes: readonly Route[] = [...healthRoutes, ...calculatorRoutes, ...scalingRoutes, ...speciesRoutes, ...recordRoutes, ...meRoutes, ...peopleRoutes, ...labRoutes, ...auditRoutes, ...outboxRoutes, ...taxonRoutes, ...vocabularyRoutes, ...recheckRoutes];
+export const routes: readonly Route[] = [...healthRoutes, ...calculatorRoutes, ...scalingRoutes, ...speciesRoutes, ...recordRoutes, ...registerRoutes, ...meRoutes, ...peopleRoutes, ...labRoutes, ...auditRoutes, ...outboxRoutes, ...taxonRoutes, ...vocabularyRoutes, ...recheckRoutes, ...submissionCollectionRoutes, ...submissionRoutes, ...attachmentRoutes, ...reviewRoutes];
