@@ -1,6 +1,6 @@
-import { and, eq, inArray, sql } from 'drizzle-orm';
+import { and, eq, inArray } from 'drizzle-orm';
 import type { Queryable } from '../client';
-import { delineationCriteria, oneTimeLinks, sources, structureDefinitions, structures, taxa, taxonIdentifiers, taxonSynonyms, userRoles, users } from '../schema/index';
+import { delineationCriteria, records, setAsides, sources, structureDefinitions, structures, submissions, taxa, taxonIdentifiers, taxonSynonyms, users } from '../schema/index';
 
 /** The named actor that loads published tables; it has no password and cannot sign in. */
 export const systemActorName = 'Register loader (system)';
@@ -77,12 +77,26 @@ export async function putCarrier(db: Queryable, doi: string, carrier: string, li
   await db.update(sources).set({ carrier, licence }).where(and(eq(sources.doi, doi), eq(sources.carrier, '')));
 }
 
-export async function hasAdministrator(db: Queryable): Promise<boolean> {
-  return (await db.$count(userRoles, eq(userRoles.role, 'administrator'))) > 0;
+/** Keys of the sources whose values the system actor has already loaded. */
+export async function findLoadedSourceKeys(db: Queryable): Promise<Set<string>> {
+  const rows = await db
+    .selectDistinct({ key: sources.key })
+    .from(records)
+    .innerJoin(sources, eq(sources.id, records.sourceId))
+    .innerJoin(submissions, eq(submissions.id, records.submissionId))
+    .innerJoin(users, and(eq(users.id, submissions.createdBy), eq(users.kind, 'system')));
+  return new Set(rows.map((row) => row.key));
 }
 
-export async function insertOneTimeLink(db: Queryable, link: { tokenHash: string; purpose: string; expiresAt: Date }): Promise<void> {
-  // An earlier link of the same purpose that nobody used ends with the new one.
-  await db.update(oneTimeLinks).set({ expiresAt: sql`least(${oneTimeLinks.expiresAt}, now())` }).where(eq(oneTimeLinks.purpose, link.purpose));
-  await db.insert(oneTimeLinks).values(link);
+/** Serial number of the record that a source holds of a taxon's structure, and whether it was ever set aside. */
+export async function findRecordOf(db: Queryable, where: { taxonSlug: string; structure: string; sourceKey: string }): Promise<{ number: number; everSetAside: boolean } | null> {
+  const [row] = await db
+    .select({ id: records.id, number: records.number })
+    .from(records)
+    .innerJoin(taxa, eq(taxa.id, records.taxonId))
+    .innerJoin(structures, eq(structures.id, records.structureId))
+    .innerJoin(sources, eq(sources.id, records.sourceId))
+    .where(and(eq(taxa.slug, where.taxonSlug), eq(structures.key, where.structure), eq(sources.key, where.sourceKey)));
+  if (row === undefined) return null;
+  return { number: row.number, everSetAside: (await db.$count(setAsides, eq(setAsides.recordId, row.id))) > 0 };
 }

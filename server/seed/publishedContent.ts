@@ -90,6 +90,20 @@ function mammalEntry(row: Record<string, string>, species: string): Entry {
   };
 }
 
+/** The register's word on values that its checks doubt: kept as printed. */
+const doubtful = [
+  { taxon: 'callithrix-jacchus', structure: 'olfactory_bulb', check: 'spread-exceeds-mean', field: 'structureMass.spreadText', word: 'Printed so: the standard deviation is larger than the mass. Kept and not altered.' },
+];
+
+function explanationsOf(values: readonly Entry[]): Record<string, string> {
+  return Object.fromEntries(
+    doubtful.flatMap(({ taxon, structure, check, field, word }) => {
+      const index = values.findIndex((value) => value.taxon === taxon && value.structure === structure);
+      return index < 0 ? [] : [[`${check}@values.${index}.${field}`, word]];
+    }),
+  );
+}
+
 function sourceOf(doi: string, citation: string, carrier: string, licence: string, values: Entry[], sharesAnimalsWith: LiteratureContent['source']['sharesAnimalsWith'] = []): PublishedSource {
   const year = yearOf(citation);
   const content = literatureContentSchema.parse({
@@ -97,6 +111,7 @@ function sourceOf(doi: string, citation: string, carrier: string, licence: strin
     source: { doi, citation, year, sharesAnimalsWith },
     values,
     provenance: { published: true, doi, citation, approvalKind: 'see-source', licenceAccepted: true },
+    explanations: explanationsOf(values),
     note: `Read from: ${carrier}. ${licence}`,
   });
   return { doi, year, citation, carrier, licence, content };
