@@ -1,0 +1,5 @@
+import { RegisterScreen } from '../../components/register/RegisterScreen';
+
+export default function RegisterRoute() {
+  return <RegisterScreen />;
+}
