@@ -1,4 +1,4 @@
-import { registeredFamily, type FontName } from '../theme/typography';
+import { registeredFamily, type FontName } from '../theme/fontNames';
 import { textWidth } from './labels';
 
 export interface FigureCaption {

@@ -1,6 +1,6 @@
 import { Asset } from 'expo-asset';
 import { fontFiles } from '../theme/fonts';
-import { registeredFamily, type FontName } from '../theme/typography';
+import { registeredFamily, type FontName } from '../theme/fontNames';
 import { composeFigureSvg, facesIn } from './figureSvg';
 import type { SaveFigureRequest } from './saveFigure';
 

@@ -6,7 +6,7 @@ import { SourceSans3_300Light } from '@expo-google-fonts/source-sans-3/300Light'
 import { SourceSans3_400Regular } from '@expo-google-fonts/source-sans-3/400Regular';
 import { SourceSans3_600SemiBold } from '@expo-google-fonts/source-sans-3/600SemiBold';
 import { FontDisplay, type FontSource } from 'expo-font';
-import { registeredFamily, type FontName } from './typography';
+import { registeredFamily, type FontName } from './fontNames';
 
 /** The bundled files by our names; saved figures embed them too. */
 export const fontFiles: Record<FontName, number> = {
