@@ -1,0 +1,5 @@
+import { VersionsScreen } from '../../../components/versions/VersionsScreen';
+
+export default function VersionsRoute() {
+  return <VersionsScreen />;
+}
