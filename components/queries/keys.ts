@@ -7,7 +7,7 @@ export const keys = {
   taxa: { all: ['taxa'] as const, search: (query: object) => ['taxa', 'search', query] as const, one: (id: string) => ['taxa', 'one', id] as const },
   species: { all: ['species'] as const, list: (query: object) => ['species', 'list', query] as const, page: (slug: string, version: string | null) => ['species', 'page', slug, version] as const },
   records: { all: ['records'] as const, page: (number: string) => ['records', 'page', number] as const },
-  scaling: { all: ['scaling'] as const, fit: (query: object) => ['scaling', 'fit', query] as const },
+  scaling: { all: ['scaling'] as const, fit: (query: object) => ['scaling', 'fit', query] as const, place: (query: object) => ['scaling', 'place', query] as const },
   versions: { all: ['versions'] as const, list: ['versions', 'list'] as const, page: (label: string) => ['versions', 'page', label] as const, citation: (query: object) => ['versions', 'citation', query] as const },
   submissions: {
     all: ['submissions'] as const,
