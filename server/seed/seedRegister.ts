@@ -1,6 +1,7 @@
 import type { Auth } from '../auth';
 import type { Context } from '../context';
 import { offerFirstAccount } from '../services/account/firstAccount';
+import { seedDemo } from './demo/seedDemo';
 import { seedPublished } from './published';
 import { seedVocabularies } from './vocabularies';
 
@@ -13,6 +14,7 @@ export async function seedRegister(context: Context, _auth: Auth): Promise<void>
   await seedVocabularies(context);
   if (context.demo) {
     await seedPublished(context);
+    await seedDemo(context);
     return;
   }
   if ((await offerFirstAccount(context)) !== null) context.logger.info('no administrator yet: a one-time link for the first account is ready');

@@ -1,5 +1,6 @@
+import { eq } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
-import { attachments, comments, labs, mails, notices, records, rechecks, submissionRevisions, taxa, users } from '../../db/schema/index';
+import { attachments, comments, labs, mails, notices, records, rechecks, registerSettings, submissionRevisions, taxa, users } from '../../db/schema/index';
 import { readDemonstration } from '../../server/seed/demo/demonstration';
 import { seedDemo } from '../../server/seed/demo/seedDemo';
 import type { Me } from '../../shared/contracts/account';
@@ -52,8 +53,10 @@ test('every entry stands where it is meant to, and no invented count under a rea
 });
 
 describe('running it again', () => {
-  test('changes nothing', async () => {
+  test('changes nothing, also where a run was interrupted just before its end', async () => {
     const before = await counts();
+    await seedDemo(app.context);
+    await app.context.db.delete(registerSettings).where(eq(registerSettings.key, 'demonstration'));
     await seedDemo(app.context);
     expect(await counts()).toEqual(before);
   });

@@ -3,6 +3,7 @@ import { countBeside, findFirstRecordNumber, findLabIdByName, findSubmissionByCo
 import { insertVerifiedPerson } from '../../../db/queries/firstAccount';
 import { insertLab } from '../../../db/queries/labs';
 import { findActor, insertMembership, insertRole } from '../../../db/queries/people';
+import { findSetting, putSetting } from '../../../db/queries/settings';
 import { isSlugTaken } from '../../../db/queries/taxa';
 import { recordNumber, speciesSlug } from '../../../shared/domain/identifiers';
 import { today, type Actor, type Context } from '../../context';
@@ -18,6 +19,7 @@ import { readDemonstration, type DemoEntry, type Demonstration } from './demonst
 
 type Actors = ReadonlyMap<string, Actor>;
 
+const setting = 'demonstration';
 const memberSince = '2024-01-01';
 const everythingLookedAt = { rawCounts: true, derivedValues: true, checks: true, evidence: true, provenance: true };
 
@@ -64,6 +66,8 @@ async function makeEntry(context: Context, entry: DemoEntry, actors: Actors): Pr
   if (contributor === undefined || reviewer === undefined || curator === undefined) return;
   const found = await findSubmissionByCode(context.db, contributor.id, entry.code);
   const id = found?.id ?? (await createSubmission(context, contributor, { kind: 'specimen', content: demoContent(entry), demonstration: true })).id;
+  // A later revision is somebody's own work, not the demonstration's.
+  if (found !== null && found.revision > 1) return;
   let status = found?.status ?? 'draft';
   const beside = await countBeside(context.db, id);
   if (entry.evidence !== undefined && status === 'draft' && beside.attachments === 0) {
@@ -87,13 +91,15 @@ async function makeEntry(context: Context, entry: DemoEntry, actors: Actors): Pr
 
 /**
  * Fills a demonstration register: two invented laboratories, their people, invented species and submissions in every state,
- * made by the same services as anybody's. Safe to run again: what stands stays, and an entry left half-way goes on.
+ * made by the same services as anybody's. It is made once: a run that was interrupted is taken up where it ended, and what
+ * people do with it afterwards stays.
  * Does nothing outside demo mode.
  */
 export async function seedDemo(context: Context): Promise<void> {
-  if (!context.demo) return;
+  if (!context.demo || (await findSetting(context.db, setting)) === 'complete') return;
   const demonstration = readDemonstration();
   const actors = await makePeople(context, demonstration, await makeLabs(context, demonstration));
   await makeTaxa(context, demonstration, actors);
   for (const entry of demonstration.entries) await makeEntry(context, entry, actors);
+  await putSetting(context.db, setting, 'complete');
 }
