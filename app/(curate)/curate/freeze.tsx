@@ -1,0 +1,5 @@
+import { FreezeScreen } from '../../../components/curate/FreezeScreen';
+
+export default function FreezeRoute() {
+  return <FreezeScreen />;
+}

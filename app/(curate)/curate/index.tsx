@@ -1,0 +1,5 @@
+import { CurateScreen } from '../../../components/curate/CurateScreen';
+
+export default function CurateRoute() {
+  return <CurateScreen />;
+}

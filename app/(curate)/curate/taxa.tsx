@@ -1,0 +1,5 @@
+import { TaxaScreen } from '../../../components/curate/TaxaScreen';
+
+export default function TaxaRoute() {
+  return <TaxaScreen />;
+}

@@ -1,0 +1,5 @@
+import { DeskScreen } from '../../components/desk/DeskScreen';
+
+export default function DeskRoute() {
+  return <DeskScreen />;
+}
