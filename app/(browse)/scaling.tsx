@@ -1,0 +1,5 @@
+import { ScalingScreen } from '../../components/scaling/ScalingScreen';
+
+export default function ScalingRoute() {
+  return <ScalingScreen />;
+}
