@@ -1,8 +1,7 @@
 import { and, asc, eq, inArray, isNull, lte, ne, or, sql } from 'drizzle-orm';
 import type { overlapKinds } from '../../shared/contracts/vocabulary';
-import { nextRecheckStatus } from '../../shared/domain/reviewState';
 import type { Queryable, Transaction } from '../client';
-import { recheckEvents, recordRevisions, records, rechecks, sourceOverlaps, sources, structures, submissions } from '../schema/index';
+import { recordRevisions, records, rechecks, sourceOverlaps, sources, structures, submissions } from '../schema/index';
 
 export type StoredRow = (typeof recordRevisions.$inferSelect)['row'];
 
@@ -118,17 +117,4 @@ export async function findRecheckOfSubmission(db: Queryable, recheckId: string) 
     .innerJoin(records, eq(records.id, rechecks.recordId))
     .where(eq(rechecks.id, recheckId));
   return row ?? null;
-}
-
-/**
- * Answers an open re-check by a correcting revision: event and status together. Where it was answered already it stays
- * as it is.
- */
-export async function answerRecheckByRevision(tx: Transaction, input: { recheckId: string; submissionRevisionId: string; actorId: string; text: string; at: Date }): Promise<boolean> {
-  const [row] = await tx.select({ status: rechecks.status }).from(rechecks).where(eq(rechecks.id, input.recheckId)).for('update');
-  const next = row === undefined ? null : nextRecheckStatus(row.status, 'answer');
-  if (next === null) return false;
-  await tx.insert(recheckEvents).values({ recheckId: input.recheckId, kind: 'answered', answer: 'corrected', text: input.text, submissionRevisionId: input.submissionRevisionId, actorId: input.actorId, createdAt: input.at });
-  await tx.update(rechecks).set({ status: next }).where(eq(rechecks.id, input.recheckId));
-  return true;
 }

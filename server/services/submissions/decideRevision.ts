@@ -1,16 +1,18 @@
 import { insertAudit } from '../../../db/queries/audit';
-import { answerRecheckByRevision } from '../../../db/queries/records';
+import { findRecheck, insertRecheckEvent, lockRecheck, setRecheckStatus } from '../../../db/queries/rechecks';
 import { findRevisions, findSubmission, insertDecision, insertSubmissionEvent, lockSubmission, setRevisionStatus, type RevisionRow } from '../../../db/queries/submissions';
 import { findTaxaInPlace } from '../../../db/queries/recordVocabulary';
 import type { Transaction } from '../../../db/client';
 import type { SubmissionDetail } from '../../../shared/contracts/submissions';
 import type { DecisionKind } from '../../../shared/contracts/vocabulary';
 import { diffContent } from '../../../shared/domain/diffContent';
-import { nextRevisionStatus } from '../../../shared/domain/reviewState';
-import type { Actor, Context } from '../../context';
+import { nextRecheckStatus, nextRevisionStatus } from '../../../shared/domain/reviewState';
+import { findActor } from '../../../db/queries/people';
+import { today, type Actor, type Context } from '../../context';
 import { AppError } from '../../errors';
 import { requestFitRefresh } from '../dataset/fitRefresh';
 import { enqueueMails } from '../notify';
+import { tellAnswered } from '../rechecks/tellings';
 import { knowSubmission, whyNotDecide } from './access';
 import { headingOf, taxonSlugsOf } from './contentFacts';
 import { describeSubmission } from './describe';
@@ -49,6 +51,20 @@ function waitingRevision(revisions: readonly RevisionRow[], number: number): Rev
   return read;
 }
 
+/** A re-check that the approved revision was begun for is answered by it, where its laboratory has not said so already. */
+async function answerRecheckByCorrection(context: Context, tx: Transaction, revision: RevisionRow): Promise<string[]> {
+  if (revision.answersRecheckId === null || revision.submittedBy === null) return [];
+  const recheck = await findRecheck(tx, revision.answersRecheckId);
+  const status = await lockRecheck(tx, revision.answersRecheckId);
+  const next = status === null ? null : nextRecheckStatus(status, 'answer');
+  const submitter = await findActor(tx, revision.submittedBy, today(context));
+  if (recheck === null || next === null || submitter === null) return [];
+  const text = `Corrected by revision ${revision.revision}.`;
+  const eventId = await insertRecheckEvent(tx, { recheckId: recheck.id, kind: 'answered', answer: 'corrected', text, actorId: submitter.id, submissionRevisionId: revision.id, createdAt: context.clock() });
+  await setRecheckStatus(tx, recheck.id, next, null);
+  return tellAnswered(context, tx, submitter, recheck, 'corrected', text, eventId);
+}
+
 export interface DecisionOutcome {
   mails: string[];
   runId: string | null;
@@ -72,11 +88,10 @@ export async function decideWithin(context: Context, tx: Transaction, actor: Pic
 
   const isSystem = submission.creatorKind === 'system';
   let runId: string | null = null;
+  const mails: string[] = [];
   if (decision.decision === 'approve') {
     const { changedRecordIds } = await makeRecords(tx, submission, revision, { at: now, by: actor.name });
-    if (revision.answersRecheckId !== null) {
-      await answerRecheckByRevision(tx, { recheckId: revision.answersRecheckId, submissionRevisionId: revision.id, actorId: revision.submittedBy ?? submission.createdBy, text: `Corrected by revision ${revision.revision}.`, at: now });
-    }
+    mails.push(...(await answerRecheckByCorrection(context, tx, revision)));
     // The loader's tables come in by the dozen; whoever loads them asks once, at the end.
     if (!isSystem && changedRecordIds.length > 0) runId = await requestFitRefresh(tx, changedRecordIds, 'records approved');
     context.killPoint('decide:records-written');
@@ -84,7 +99,7 @@ export async function decideWithin(context: Context, tx: Transaction, actor: Pic
   if (isSystem) return { mails: [], runId };
   await insertAudit(tx, { actorId: actor.id, action: `submission-${eventOf[decision.decision]}`, targetType: 'submission', targetId: submissionId, detail: { revision: revision.revision, comment: decision.comment } });
   const taxa = await findTaxaInPlace(tx, taxonSlugsOf(revision.content));
-  const mails = await tellDecided(context, tx, { submission, revision, title: headingOf(revision.content, taxa).title, decision: decision.decision, comment: decision.comment, by: actor.name });
+  mails.push(...(await tellDecided(context, tx, { submission, revision, title: headingOf(revision.content, taxa).title, decision: decision.decision, comment: decision.comment, by: actor.name })));
   return { mails, runId };
 }
 
