@@ -23,9 +23,9 @@ async function rechecks(context: Context, status: 'open' | 'answered', labId: st
   return found
     .filter((one) => exceptLab === null || one.labId !== exceptLab)
     .slice(0, most)
-    .map(({ id, number, species, structure, question, createdAt, demonstration }) => ({
+    .map(({ id, number, species, structure, question, at, demonstration }) => ({
       kind: status === 'open' ? ('recheck-open' as const) : ('recheck-answered' as const),
-      title: `${recordNumber(number)}, ${structure}`, species, detail: question, href: `/rechecks/${id}`, since: createdAt.toISOString(), demonstration,
+      title: `${recordNumber(number)}, ${structure}`, species, detail: question, href: `/rechecks/${id}`, since: at.toISOString(), demonstration,
     }));
 }
 
