@@ -22,11 +22,11 @@ export function useSubmission(id: string) {
   return useQuery({ queryKey: keys.submissions.one(id), queryFn: ({ signal }) => api.get(path(id), submissionDetailSchema, { signal }), staleTime: staleTimes.working });
 }
 
-/** Derived values, checks and places of a content that is not saved yet. */
-export function usePreview(content: SubmissionContent | null) {
+/** Derived values, checks and places of a content that is not saved yet, with the content they are of. */
+export function usePreview(content: SubmissionContent | null, submissionId: string | null = null) {
   return useQuery({
     queryKey: keys.submissions.preview(content),
-    queryFn: ({ signal }) => api.send('POST', '/submissions/preview', { content }, previewSchema, { signal }),
+    queryFn: async ({ signal }) => ({ content, preview: await api.send('POST', '/submissions/preview', { content, submissionId }, previewSchema, { signal }) }),
     placeholderData: keepPreviousData,
     enabled: content !== null,
     gcTime: 60_000,
@@ -62,6 +62,12 @@ export function useSaveDraft(id: string) {
     mutationFn: ({ content, etag }: { content: SubmissionContent; etag: string }) => api.send('PATCH', path(id), { content }, submissionDetailSchema, { headers: { 'If-Match': etag } }),
     onSuccess: (detail) => client.setQueryData(keys.submissions.one(id), detail),
   });
+}
+
+/** Asks for the newest state of a submission, past what is known of it. */
+export function useReloadSubmission(id: string) {
+  const client = useQueryClient();
+  return () => client.fetchQuery({ queryKey: keys.submissions.one(id), queryFn: () => api.get(path(id), submissionDetailSchema), staleTime: 0 });
 }
 
 export function useSubmit(id: string) {

@@ -63,7 +63,10 @@ export function StructureReview({ content, index, derived, onComment }: Structur
   );
 }
 
-function derivedRows({ structureMassG, cells, neurons, otherCells, neuronsPerMg, cellsPerMg, doubled }: DerivedStructure): KeyValue[] {
+export type DerivedValues = Pick<DerivedStructure, 'structureMassG' | 'cells' | 'neurons' | 'otherCells' | 'neuronsPerMg' | 'cellsPerMg' | 'doubled'>;
+
+/** Mass, counts and densities of a structure, each in its quantity's colour. */
+export function derivedRows({ structureMassG, cells, neurons, otherCells, neuronsPerMg, cellsPerMg, doubled }: DerivedValues): KeyValue[] {
   const count = (key: 'cells' | 'neurons' | 'otherCells', label: string, tone: 'cells' | 'neurons' | 'other', estimate: { value: number | null; standardError: number | null }): KeyValue => ({
     key,
     label,

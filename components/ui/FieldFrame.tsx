@@ -19,6 +19,8 @@ export interface FieldText {
   hint?: string;
   /** Keep the label for ears only, in a table cell. */
   labelHidden?: boolean;
+  /** Keep error and warning for ears only: they stand in full below the table. */
+  messageHidden?: boolean;
 }
 
 interface FieldFrameProps extends FieldText {
@@ -34,7 +36,7 @@ export function describedBy(id: string, { error, warning, hint }: Pick<FieldText
 }
 
 /** Label above, control, then error or warning or hint, tied to the control by ids. */
-export function FieldFrame({ id, label, tone = 'ink', error, warning, hint, labelHidden, grow, children }: FieldFrameProps) {
+export function FieldFrame({ id, label, tone = 'ink', error, warning, hint, labelHidden, messageHidden = false, grow, children }: FieldFrameProps) {
   const { colour } = useTheme();
   return (
     <View style={[{ gap: 4, minWidth: 0 }, grow ? { flexGrow: 1, flexShrink: 1, flexBasis: 0 } : null]}>
@@ -50,8 +52,8 @@ export function FieldFrame({ id, label, tone = 'ink', error, warning, hint, labe
         {label}
       </Element>
       {children}
-      {error ? <FieldMessage id={`${id}-error`} kind="error" text={error} /> : null}
-      {!error && warning ? <FieldMessage id={`${id}-warning`} kind="warning" text={warning} /> : null}
+      {error ? <FieldMessage id={`${id}-error`} kind="error" text={error} hidden={messageHidden} /> : null}
+      {!error && warning ? <FieldMessage id={`${id}-warning`} kind="warning" text={warning} hidden={messageHidden} /> : null}
       {hint ? (
         <Text id={`${id}-hint`} size="least" tone="inkSoft">
           {hint}
@@ -61,7 +63,18 @@ export function FieldFrame({ id, label, tone = 'ink', error, warning, hint, labe
   );
 }
 
-function FieldMessage({ id, kind, text }: { id: string; kind: 'error' | 'warning'; text: string }) {
+const forEarsOnly = { position: 'absolute', width: 1, height: 1, overflow: 'hidden' } as const;
+
+function FieldMessage({ id, kind, text, hidden }: { id: string; kind: 'error' | 'warning'; text: string; hidden: boolean }) {
+  if (hidden) {
+    return (
+      <View style={forEarsOnly}>
+        <Text id={id} size="secondary">
+          {text}
+        </Text>
+      </View>
+    );
+  }
   return (
     <View style={{ flexDirection: 'row', gap: 6, alignItems: 'flex-start' }}>
       <View style={{ paddingTop: 2 }}>

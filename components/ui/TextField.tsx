@@ -34,11 +34,13 @@ export interface TextFieldProps extends FieldText {
   inputRef?: Ref<TextInput>;
   /** Left inside the frame, a sign. */
   start?: ReactNode;
+  /** Right inside the frame, a control: the choice of a unit. */
+  end?: ReactNode;
 }
 
 /** One line of text (or several) with label, unit, error, warning and hint. */
 export function TextField(props: TextFieldProps) {
-  const { value, onChangeText, onBlur, onSubmit, unit, placeholder, disabled, readOnly, required, secret, rows, inputMode, autoComplete, autoFocus, maxLength, align, strong, grow, inputRef, start, ...text } = props;
+  const { value, onChangeText, onBlur, onSubmit, unit, placeholder, disabled, readOnly, required, secret, rows, inputMode, autoComplete, autoFocus, maxLength, align, strong, grow, inputRef, start, end, ...text } = props;
   const { colour } = useTheme();
   const { wide } = useBreakpoint();
   const id = useId();
@@ -102,6 +104,7 @@ export function TextField(props: TextFieldProps) {
             {unit}
           </Text>
         ) : null}
+        {end}
       </View>
     </FieldFrame>
   );

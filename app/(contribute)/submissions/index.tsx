@@ -1,0 +1,5 @@
+import { SubmissionsScreen } from '../../../components/submissions/SubmissionsScreen';
+
+export default function SubmissionsRoute() {
+  return <SubmissionsScreen />;
+}

@@ -1,0 +1,5 @@
+import { NewSubmissionScreen } from '../../../components/submissions/NewSubmissionScreen';
+
+export default function NewSubmissionRoute() {
+  return <NewSubmissionScreen />;
+}

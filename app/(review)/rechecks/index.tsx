@@ -1,0 +1,5 @@
+import { RecheckListScreen } from '../../../components/rechecks/RecheckListScreen';
+
+export default function RechecksRoute() {
+  return <RecheckListScreen />;
+}
