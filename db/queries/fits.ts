@@ -1,8 +1,8 @@
-import { and, asc, desc, eq, inArray, isNull, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, inArray, isNull, lte, notExists, sql } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/pg-core';
 import type { FlagKind, FitMethod, Variable } from '../../shared/contracts/vocabulary';
 import type { Queryable, Transaction } from '../client';
-import { fitResults, fitRuns, flags, records, standingFits, structures, taxa, versions } from '../schema/index';
+import { fitResults, fitRuns, flags, recordRevisions, records, standingFits, structures, taxa, versions } from '../schema/index';
 
 export interface StandingFitRow {
   id: string;
@@ -42,7 +42,7 @@ export async function insertStandingFits(tx: Transaction, values: readonly (type
 }
 
 /** Asks for a computation; the row without `finishedAt` is the request. */
-export async function insertFitRun(tx: Transaction, run: { set: 'working' | 'version'; versionId: string | null; reason: string; touches: readonly string[] }): Promise<string> {
+export async function insertFitRun(tx: Transaction, run: { set: 'working' | 'version'; versionId: string | null; reason: string; touches: readonly string[]; createdAt?: Date }): Promise<string> {
   const [row] = await tx.insert(fitRuns).values({ ...run, touches: [...run.touches] }).returning({ id: fitRuns.id });
   if (row === undefined) throw new Error('The request for a computation was not written.');
   return row.id;
@@ -68,6 +68,19 @@ export async function findUnfinishedFitRuns(db: Queryable, limit: number): Promi
     .orderBy(asc(fitRuns.createdAt))
     .limit(limit);
   return rows.map((row) => row.id);
+}
+
+/** Records whose embargo has ended and that no computation of the working set has looked at since. */
+export async function findRecordsOutOfEmbargo(db: Queryable, today: string): Promise<string[]> {
+  const since = db
+    .select({ one: sql`1` })
+    .from(fitRuns)
+    .where(and(eq(fitRuns.set, 'working'), sql`(${fitRuns.createdAt} at time zone 'UTC')::date >= ${recordRevisions.embargoUntil}`));
+  const rows = await db
+    .selectDistinct({ recordId: recordRevisions.recordId })
+    .from(recordRevisions)
+    .where(and(lte(recordRevisions.embargoUntil, today), notExists(since)));
+  return rows.map((row) => row.recordId);
 }
 
 export async function finishFitRun(tx: Transaction, runId: string, at: Date): Promise<void> {

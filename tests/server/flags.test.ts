@@ -108,6 +108,13 @@ describe('a record under embargo', () => {
     expect((await contributor.get<RecordPage>(`/records/${number}`)).status).toBe(200);
     now = new Date('2027-01-01T00:00:00.000Z');
     expect(await records()).toContain(number);
+    // The sweep notices the day: the standing fit of the working set takes the second marmot in, once.
+    await app.runJobs();
+    const inputs = async () => (await app.context.db.execute<{ n: number }>(`select count(*)::int as n from fit_results where latest and inputs::text like '%${number}%'`)).rows[0]?.n;
+    expect(await inputs()).toBeGreaterThan(0);
+    const before = (await app.context.db.execute<{ n: number }>('select count(*)::int as n from fit_runs')).rows[0]?.n;
+    await app.runJobs();
+    expect((await app.context.db.execute<{ n: number }>('select count(*)::int as n from fit_runs')).rows[0]?.n).toBe(before);
     expect((await app.anonymous.get(`/records/${number}`)).status).toBe(404);
   });
 });

@@ -1,5 +1,5 @@
 import type { Transaction } from '../../../db/client';
-import { finishFitRun, insertFitRun, lockFitRefresh, lockFitRun, retireLatest } from '../../../db/queries/fits';
+import { findRecordsOutOfEmbargo, findUnfinishedFitRuns, finishFitRun, insertFitRun, lockFitRefresh, lockFitRun, retireLatest } from '../../../db/queries/fits';
 import { today, type Context } from '../../context';
 import { loadWorkingRows, type DatasetRow } from './rows';
 import { computeStandingFits, ensureStandingFits, storeStandingFits, type FitDefinition } from './standingFits';
@@ -46,4 +46,18 @@ export async function runFitRefresh(context: Context, runId: string): Promise<vo
     context.killPoint('fits:stored');
     await finishFitRun(tx, runId, context.clock());
   });
+}
+
+/**
+ * Finds the computations that nobody has handed to the queue: what a crash left behind, and records that came out of
+ * embargo by the passing of a day, which no act of a person announces.
+ * @returns ids of the runs to be worked on
+ */
+export async function findFitRunsToDo(context: Context): Promise<string[]> {
+  const { db } = context;
+  const freed = await findRecordsOutOfEmbargo(db, today(context));
+  if (freed.length > 0) {
+    await db.transaction((tx) => insertFitRun(tx, { set: 'working', versionId: null, reason: 'embargo ended', touches: freed, createdAt: context.clock() }));
+  }
+  return findUnfinishedFitRuns(db, 200);
 }
