@@ -18,7 +18,7 @@ const createWith = async (client: TestClient, content: unknown, kind = 'specimen
   return answer.body;
 };
 const patch = (client: TestClient, id: string, content: unknown, ifMatch?: string) =>
-  client.request<SubmissionDetail & Problem & { current?: SubmissionDetail }>('PATCH', `/submissions/${id}`, { content }, ifMatch === undefined ? {} : { headers: { 'if-match': ifMatch } });
+  client.request<SubmissionDetail & Pick<Problem, 'code' | 'errors'> & { current?: SubmissionDetail }>('PATCH', `/submissions/${id}`, { content }, ifMatch === undefined ? {} : { headers: { 'if-match': ifMatch } });
 
 beforeAll(async () => {
   app = await startTestApp({ seed: 'vocabularies', clock: () => new Date('2026-06-15T10:00:00.000Z') });
