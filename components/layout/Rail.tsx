@@ -24,7 +24,7 @@ export function Rail({ places, current, height }: RailProps) {
   const yOf = (index: number) => rail.firstTick + index * rail.step;
   const last = yOf(places.length - 1);
   return (
-    <View role="banner" {...{ dataSet: { noprint: 'true' } }} style={{ width: rail.width, height, flexShrink: 0 }}>
+    <View role="banner" {...{ dataSet: { noprint: 'true' } }} style={{ width: rail.width, height, flexShrink: 0, zIndex: 1 }}>
       <Svg width={rail.width + 8} height={height} aria-hidden={true} style={{ position: 'absolute', left: 0, top: 0 }}>
         <Line x1={axis} x2={axis} y1={0} y2={height} stroke={colour.tick} strokeWidth={1.5} />
         {minorTickOffsets(places.length, rail.step).map((offset) => (

@@ -22,6 +22,11 @@ const states: Record<WaitingItem['kind'], { state: string; words: string }> = {
   flag: { state: 'flagged', words: 'flagged' },
 };
 
+/** Titles begin with the species, which stands in italic before them. */
+function withoutSpecies({ title, species }: WaitingItem): string {
+  return species !== '' && title.startsWith(species) ? title.slice(species.length).replace(/^[,\s]+/, '') : title;
+}
+
 /** What waits for the person who looks, each with the way to it. */
 export function WaitsForYou({ items }: { items: readonly WaitingItem[] }) {
   const { colour } = useTheme();
@@ -47,7 +52,7 @@ export function WaitsForYou({ items }: { items: readonly WaitingItem[] }) {
               <Text>
                 {item.species ? <BinomialSpan name={item.species} /> : null}
                 {item.species ? ' ' : ''}
-                {item.title}
+                {withoutSpecies(item)}
               </Text>
             </TextLink>
             {item.detail ? (

@@ -47,17 +47,17 @@ function SpeciesView({ page }: { page: SpeciesPage }) {
     <Row gap={8} wrap>
       <CladeMark clade={page.clade} />
       <Text size="table" tone="inkSoft">
-        {[page.cladeName, `${records.length} records`, animals > 0 ? `${animals} of single specimens` : null, `version ${page.version}`, ...page.commonNames].filter(Boolean).join(' · ')}
+        {[page.cladeName, `${records.length} records`, animals > 0 ? `${animals} of single specimens` : null, `version ${page.version}`, page.commonNames[0]].filter(Boolean).join(' · ')}
       </Text>
     </Row>
   );
   const main = (
     <>
       {shares.length > 1 ? <MassNeuronShares parts={shares} /> : null}
-      {page.flags.length > 0 ? <FlagList flags={page.flags} /> : null}
       {page.structures.map((structure) => (
         <StructureOfSpecies key={structure.key} structure={structure} clade={page.clade} />
       ))}
+      {page.flags.length > 0 ? <FlagList flags={page.flags} /> : null}
     </>
   );
   const aside = (

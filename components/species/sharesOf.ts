@@ -10,7 +10,7 @@ export function sharesOf(page: Pick<SpeciesPage, 'structures'>): SharePart[] {
     const structure = page.structures.find((candidate) => candidate.key === key);
     const massG = structure?.mean.structureMassG ?? null;
     const neurons = structure?.mean.neurons ?? null;
-    return structure && massG !== null && neurons !== null ? [{ key, label: structure.name, massG, neurons }] : [];
+    return structure && massG !== null && neurons !== null ? [{ key, label: structure.name.toLowerCase(), massG, neurons }] : [];
   });
   if (measured.length < 3) return [];
   const massG = measured.reduce((sum, part) => sum + part.massG, 0);

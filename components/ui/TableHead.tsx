@@ -12,10 +12,11 @@ interface TableHeadProps<Item> {
   sort?: TableSort;
   onSort?: TableProps<Item>['onSort'];
   sticky?: boolean;
+  tight?: boolean;
 }
 
 /** Heads of the columns over a line in ink. */
-export function TableHead<Item>({ columns, sort, onSort, sticky }: TableHeadProps<Item>) {
+export function TableHead<Item>({ columns, sort, onSort, sticky, tight }: TableHeadProps<Item>) {
   const { colour } = useTheme();
   const { wide } = useBreakpoint();
   return (
@@ -32,7 +33,7 @@ export function TableHead<Item>({ columns, sort, onSort, sticky }: TableHeadProp
                 textAlign: column.align === 'end' ? 'right' : 'left',
                 verticalAlign: 'bottom',
                 width: column.width,
-                padding: edgePadding(index, columns.length, 6, wide),
+                padding: edgePadding(index, columns.length, 6, wide && !tight),
                 fontFamily: fontFamily('sans'),
                 fontWeight: 'normal',
                 boxShadow: `inset 0 -1px 0 ${colour.ink}`,
@@ -58,14 +59,14 @@ function HeadWords<Item>({ column, sorted, onSort, wide }: { column: TableColumn
     );
   }
   const words = (
-    <Text size="secondary" tone={column.tone ?? 'inkSoft'} weight={column.tone || sorted ? 'semibold' : 'regular'} nowrap={column.nowrap && wide}>
+    <Text size="secondary" tone={column.tone ?? 'inkSoft'} weight={column.tone || sorted ? 'semibold' : 'regular'} align={column.align === 'end' ? 'right' : 'left'} nowrap={column.nowrap && wide}>
       {column.head}
       {sorted ? (sorted === 'ascending' ? ' ↑' : ' ↓') : ''}
     </Text>
   );
   if (!column.sortable || !onSort) return words;
   return (
-    <Pressable role="button" style={{ alignSelf: column.align === 'end' ? 'flex-end' : 'flex-start' }} onPress={() => onSort({ key: column.key, direction: sorted === 'ascending' ? 'descending' : 'ascending' })}>
+    <Pressable role="button" style={{ alignItems: column.align === 'end' ? 'flex-end' : 'flex-start' }} onPress={() => onSort({ key: column.key, direction: sorted === 'ascending' ? 'descending' : 'ascending' })}>
       {words}
     </Pressable>
   );

@@ -15,13 +15,14 @@ interface TableRowProps<Item> {
   href: Href | null;
   current?: boolean;
   dense?: boolean;
+  tight?: boolean;
   /** Place in the whole list, counted from 1, where only part of it is in the page. */
   rowIndex?: number;
   elementRef?: Ref<HTMLElement>;
 }
 
 /** One row of a table: first cell is its head and holds the link, a hairline below. */
-export function TableRow<Item>({ item, columns, href, current, dense, rowIndex, elementRef }: TableRowProps<Item>) {
+export function TableRow<Item>({ item, columns, href, current, dense, tight, rowIndex, elementRef }: TableRowProps<Item>) {
   const { colour } = useTheme();
   const { wide } = useBreakpoint();
   return (
@@ -42,9 +43,12 @@ export function TableRow<Item>({ item, columns, href, current, dense, rowIndex, 
             css={{
               textAlign: column.align === 'end' ? 'right' : 'left',
               verticalAlign: 'middle',
-              padding: edgePadding(index, columns.length, 3, wide),
+              padding: edgePadding(index, columns.length, 3, wide && !tight),
               fontFamily: fontFamily('sans'),
               fontWeight: 'normal',
+              // The cell's own line is that of its text, so that marks, links and numbers stand on one middle.
+              fontSize: 15,
+              lineHeight: '20px',
               whiteSpace: column.nowrap ? 'nowrap' : undefined,
             }}
           >

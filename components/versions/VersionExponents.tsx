@@ -13,8 +13,8 @@ import { Text } from '../ui/Text';
 const methodNames: Record<string, string> = { ols: 'least squares', sma: 'standardised major axis' };
 
 const questionOf = (fit: StandingExponent): string => `${fit.y}/${fit.yStructure ?? ''}/${fit.x}/${fit.xStructure ?? ''}/${fit.method}`;
-/** The clade stands in its row, so the question is named without it. */
-const wordsOf = (fit: StandingExponent): string => `${fit.title.replace(` in ${fit.cladeName}`, '')}, ${methodNames[fit.method] ?? fit.method}`;
+/** The clade stands in its row, so the question is named without it: titles end in clade and method. */
+const wordsOf = (fit: StandingExponent): string => `${fit.title.replace(`, ${fit.cladeName}, ${fit.method.toUpperCase()}`, '')}, ${methodNames[fit.method] ?? fit.method}`;
 
 function columnsFor(fits: readonly StandingExponent[], label: string, previous: string | null): TableColumn<StandingExponent>[] {
   const scale = scaleFor(fits.flatMap(({ exponent, lower, upper }) => (exponent === null ? [] : [{ exponent, lower, upper }])));
