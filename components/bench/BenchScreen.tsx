@@ -1,9 +1,11 @@
 import type { Href } from 'expo-router';
 import { useState } from 'react';
 import { View } from 'react-native';
+import type { SampleEstimate } from '../../shared/domain/sampleTypes';
 import { Screen } from '../layout/Screen';
 import { timeText } from '../layout/timeText';
 import { useBreakpoint } from '../layout/useBreakpoint';
+import { Quantity } from '../marks/Quantity';
 import { StateSign } from '../marks/StateSign';
 import { useAccount } from '../queries/account';
 import { Button } from '../ui/Button';
@@ -35,7 +37,7 @@ export function BenchScreen() {
     </>
   );
   return (
-    <Screen title="Bench" sub="One sample, from the counting chamber to cells and neurons. Nothing is sent; it stays on this device." description="From nuclei counted in a chamber to cells, neurons and other cells with their errors." actions={kept}>
+    <Screen title="Bench" sub="One sample, from the counting chamber to cells and neurons. Nothing is sent; it stays on this device." description="From nuclei counted in a chamber to cells, neurons and other cells with their errors." actions={kept} foot={!wide && bench.reading.estimate ? <LiveNumbers estimate={bench.reading.estimate} /> : undefined}>
       <Cautions />
       {sideBySide ? (
         <View style={{ flexDirection: 'row', gap: 48, alignItems: 'flex-start' }}>
@@ -74,5 +76,25 @@ export function BenchScreen() {
         onCancel={() => setAsking(false)}
       />
     </Screen>
+  );
+}
+
+/** On a phone the two numbers that matter stay in sight while one types. */
+function LiveNumbers({ estimate }: { estimate: SampleEstimate }) {
+  return (
+    <View style={{ flex: 1, flexDirection: 'row', justifyContent: 'space-between', gap: 12 }} aria-hidden={true}>
+      <View>
+        <Text size="least" tone="cells" weight="semibold">
+          cells
+        </Text>
+        <Quantity value={estimate.cells.value} error={estimate.cells.standardError} kind="count" tone="cells" />
+      </View>
+      <View style={{ alignItems: 'flex-end' }}>
+        <Text size="least" tone="neurons" weight="semibold">
+          neurons
+        </Text>
+        <Quantity value={estimate.neurons.value} error={estimate.neurons.standardError} kind="count" tone="neurons" missing="NeuN counts missing" />
+      </View>
+    </View>
   );
 }

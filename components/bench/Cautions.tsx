@@ -5,8 +5,6 @@ import { radius } from '../theme/tokens';
 import { useBreakpoint } from '../layout/useBreakpoint';
 import { Button } from '../ui/Button';
 import { Heading } from '../ui/Heading';
-import { Row } from '../ui/Row';
-import { Sign } from '../ui/Sign';
 import { Span, Text } from '../ui/Text';
 import { recallCautionsRead, rememberCautionsRead } from './keptBench';
 
@@ -42,12 +40,9 @@ export function Cautions() {
   }
   return (
     <View role="region" aria-label="Cautions" style={[frame, { paddingVertical: 14, gap: 10 }]}>
-      <Row gap={8}>
-        <Sign name="bar" tone="waiting" />
-        <Heading level={2} look="small" tone="waiting">
-          Before you count
-        </Heading>
-      </Row>
+      <Heading level={2} look="small" tone="waiting">
+        Before you count
+      </Heading>
       <View role="list" style={{ gap: 6, flexDirection: wide ? 'row' : 'column', flexWrap: wide ? 'wrap' : 'nowrap' }}>
         {cautions.map(({ first, rest }) => (
           <View key={first} role="listitem" style={wide ? { width: '48%', paddingRight: 16 } : undefined}>

@@ -3,6 +3,7 @@ import { View } from 'react-native';
 import type { SampleEntry } from '../../shared/contracts/content';
 import { massUnits, scaleUpKinds, sides, volumeUnits } from '../../shared/contracts/vocabulary';
 import { countingChambers } from '../../shared/domain/chambers';
+import { useBreakpoint } from '../layout/useBreakpoint';
 import { Disclosure } from '../ui/Disclosure';
 import { Section } from '../ui/Section';
 import { Select } from '../ui/Select';
@@ -16,6 +17,7 @@ const scaleUpWords: Record<(typeof scaleUpKinds)[number], string> = { none: 'non
 
 /** Tissue, suspension, chamber, side and scale-up. */
 export function SampleFields({ bench }: { bench: Bench }) {
+  const { wide } = useBreakpoint();
   const { sample } = bench.entry;
   const { problems } = bench.reading;
   const { setSample } = bench;
@@ -49,19 +51,19 @@ export function SampleFields({ bench }: { bench: Bench }) {
           <NumberField label="dilution" grow value={sample.dilution} onChangeText={(dilution) => setSample({ dilution })} hint="final ÷ original volume: 5, not 1 : 5" error={problems['dilution']} />
           <Select label="side counted" grow value={sample.side ?? ''} placeholder="choose" options={sides.map((side) => ({ value: side, label: sideWords[side] }))} onChange={(side) => setSample({ side })} />
         </Pair>
-        <Pair>
-          <Select label="counting chamber" grow value={sample.chamber.key} options={countingChambers.map(({ key, name }) => ({ value: key, label: name }))} onChange={(key) => setSample({ chamber: { ...sample.chamber, key } })} hint={countingChambers.find(({ key }) => key === sample.chamber.key)?.note} />
+        <Pair stacked={!wide}>
+          <Select label="counting chamber" grow={wide} value={sample.chamber.key} options={countingChambers.map(({ key, name }) => ({ value: key, label: name }))} onChange={(key) => setSample({ chamber: { ...sample.chamber, key } })} hint={countingChambers.find(({ key }) => key === sample.chamber.key)?.note} />
           {sample.chamber.key === 'other' ? (
             <NumberField
               label="volume of one square"
-              grow
+              grow={wide}
               value={sample.chamber.squareVolume.text}
               onChangeText={(text) => setSample({ chamber: { ...sample.chamber, squareVolume: { ...sample.chamber.squareVolume, text } } })}
               end={<UnitChoice label="unit of the volume of one square" value={sample.chamber.squareVolume.unit} units={volumeUnits} onChange={(unit) => setSample({ chamber: { ...sample.chamber, squareVolume: { ...sample.chamber.squareVolume, unit } } })} />}
               error={problems['chamber.squareVolume']}
             />
           ) : (
-            <Select label="scale-up" grow value={sample.scaleUp.kind} options={scaleUpKinds.map((kind) => ({ value: kind, label: scaleUpWords[kind] }))} onChange={(kind) => setScaleUp({ kind, factor: kind === 'other-side' ? '2' : '1' })} />
+            <Select label="scale-up" grow={wide} value={sample.scaleUp.kind} options={scaleUpKinds.map((kind) => ({ value: kind, label: scaleUpWords[kind] }))} onChange={(kind) => setScaleUp({ kind, factor: kind === 'other-side' ? '2' : '1' })} />
           )}
         </Pair>
         {sample.chamber.key === 'other' ? (
@@ -98,6 +100,6 @@ export function SampleFields({ bench }: { bench: Bench }) {
 }
 
 /** Two fields side by side, of one width. */
-function Pair({ children }: { children: ReactNode }) {
-  return <View style={{ flexDirection: 'row', gap: 16, alignItems: 'flex-start' }}>{children}</View>;
+function Pair({ children, stacked }: { children: ReactNode; stacked?: boolean }) {
+  return <View style={stacked ? { gap: 14 } : { flexDirection: 'row', gap: 16, alignItems: 'flex-start' }}>{children}</View>;
 }

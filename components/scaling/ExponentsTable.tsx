@@ -1,3 +1,4 @@
+import { View } from 'react-native';
 import { formatExponent, formatInterval } from '../../shared/domain/quantityText';
 import { CladeName } from '../marks/CladeMark';
 import { ExponentAxis, ExponentWhisker, scaleFor } from '../marks/ExponentWhisker';
@@ -15,15 +16,21 @@ interface ExponentsTableProps {
 
 /** Exponent, interval and residual SD of every clade, with whiskers on one scale. */
 export function ExponentsTable({ results, marks, level }: ExponentsTableProps) {
-  const { wide } = useBreakpoint();
+  const { wide, sideBySide, width } = useBreakpoint();
+  const drawnWidth = sideBySide && width < 1600 ? 76 : undefined;
   const scale = scaleFor(results.flatMap(({ fit: { exponent } }) => (exponent ? [{ exponent: exponent.estimate, lower: exponent.lower, upper: exponent.upper }] : [])));
   const columns: TableColumn<CladeResult>[] = [
     { key: 'clade', head: 'clade, species', cell: ({ slug, name, fit }) => <CladeName clade={slug} name={name} count={fit.n} spec={marks.get(slug)} /> },
     {
       key: 'whisker',
       head: 'exponent drawn',
-      headContent: <ExponentAxis scale={scale} />,
-      cell: ({ slug, fit: { exponent } }) => (exponent ? <ExponentWhisker clade={slug} spec={marks.get(slug)} exponent={exponent.estimate} lower={exponent.lower} upper={exponent.upper} scale={scale} /> : null),
+      headContent: <ExponentAxis scale={scale} width={drawnWidth} />,
+      cell: ({ slug, fit: { exponent } }) =>
+        exponent ? (
+          <View style={{ height: 30 }}>
+            <ExponentWhisker clade={slug} spec={marks.get(slug)} exponent={exponent.estimate} lower={exponent.lower} upper={exponent.upper} scale={scale} width={drawnWidth} />
+          </View>
+        ) : null,
     },
     {
       key: 'exponent',
@@ -48,5 +55,5 @@ export function ExponentsTable({ results, marks, level }: ExponentsTableProps) {
   // Wide as drawn: the whiskers close the row.
   const [clade, whisker, ...numbers] = columns;
   const ordered = wide && clade && whisker ? [clade, ...numbers, whisker] : columns;
-  return <Table caption="Exponents" rows={results} columns={ordered} rowKey={({ slug }) => slug} dense={!wide} phoneLayout="table" />;
+  return <Table caption="Exponents" rows={results} columns={ordered} rowKey={({ slug }) => slug} dense={!wide} tight phoneLayout="table" />;
 }

@@ -19,7 +19,7 @@ import { SaveSheet, saveTable } from './SaveSheet';
 import { queryOf } from './scalingChoice';
 import { ScalingView } from './ScalingView';
 import { useScalingChoice } from './useScalingChoice';
-import { axisOf, questionTitle } from './variables';
+import { axisOf, questionTitle, shortTitle } from './variables';
 
 type OpenSheet = 'choices' | 'save' | 'cite' | null;
 
@@ -47,6 +47,7 @@ export function ScalingScreen() {
   return (
     <Screen
       title={title}
+      heading={wide ? undefined : shortTitle(answer?.question ?? choice)}
       description="Exponents with their intervals, clade by clade, over the species means of a frozen version."
       sub={wide ? undefined : sub}
       demonstration={answer?.demonstration}

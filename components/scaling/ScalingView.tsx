@@ -99,11 +99,11 @@ export function ScalingView({ answer, results, marks, choice, change, choices, b
       {status}
       <View style={{ flexDirection: 'row', gap: 20, alignItems: 'flex-start' }}>
         <View style={{ width: 196, flexShrink: 0 }}>{choices}</View>
-        <View style={[{ flex: 530, minWidth: 0, gap: 12 }, dim]}>
+        <View style={[{ flex: 500, minWidth: 0, gap: 12 }, dim]}>
           {figure}
           {drawn ? caption : null}
         </View>
-        {sideBySide && drawn ? <View style={[{ flex: 452, minWidth: 0, gap: 20, paddingLeft: 16 }, dim]}>{numbers}</View> : null}
+        {sideBySide && drawn ? <View style={[{ flex: 472, minWidth: 0, gap: 20, paddingLeft: 16 }, dim]}>{numbers}</View> : null}
       </View>
       {sideBySide || !drawn ? null : <View style={[{ gap: 20 }, dim]}>{numbers}</View>}
       {points}

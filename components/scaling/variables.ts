@@ -62,6 +62,14 @@ export function questionTitle({ y, yStructure, x, xStructure }: Question): strin
   return `${upper.charAt(0).toUpperCase()}${upper.slice(1)} on ${lower}`;
 }
 
+/** The same in one line of a phone: "Cerebral cortex: mass on neurons". */
+export function shortTitle(question: Question): string {
+  const { y, yStructure, x, xStructure } = question;
+  if (yStructure !== xStructure || yStructure === null) return questionTitle(question);
+  const structure = structureText(yStructure).replace(/^the /, '');
+  return `${structure.charAt(0).toUpperCase()}${structure.slice(1)}: ${words[y].what} on ${words[x].what}`;
+}
+
 const madeFrom: Partial<Record<Variable, readonly Variable[]>> = {
   neuronsPerMg: ['neurons', 'structureMassG'],
   cellsPerMg: ['cells', 'structureMassG'],

@@ -22,10 +22,10 @@ export function Table<Item>(props: TableProps<Item>) {
   return (
     <Element as="div" css={{ maxWidth: '100%', overflowX: 'auto' }}>
       <Element as="table" css={tableCss} attributes={{ 'aria-label': props.caption }} nativeStyle={{ borderTopColor: colour.ink }}>
-        <TableHead columns={columns} sort={props.sort} onSort={props.onSort} />
+        <TableHead columns={columns} sort={props.sort} onSort={props.onSort} tight={props.tight} />
         <Element as="tbody">
           {props.rows.map((item) => (
-            <TableRow key={props.rowKey(item)} item={item} columns={columns} href={props.rowHref?.(item) ?? null} current={props.rowKey(item) === props.currentKey} dense={props.dense} />
+            <TableRow key={props.rowKey(item)} item={item} columns={columns} href={props.rowHref?.(item) ?? null} current={props.rowKey(item) === props.currentKey} dense={props.dense} tight={props.tight} />
           ))}
         </Element>
       </Element>
