@@ -1,32 +1,19 @@
+import type { Href } from 'expo-router';
 import { RoleGate } from '../layout/RoleGate';
 import { Screen } from '../layout/Screen';
 import { useBreakpoint } from '../layout/useBreakpoint';
 import { errorInWords } from '../queries/errorInWords';
 import { useReview } from '../queries/review';
-import type { Href } from 'expo-router';
 import { BackLink } from '../ui/TextLink';
 import { QueryView } from '../ui/QueryView';
-import { Text } from '../ui/Text';
 import { ReviewDetail } from './ReviewDetail';
 import { ReviewList } from './ReviewList';
+import { reviewRoles } from './reviewRoles';
 
-const who = ['reviewer', 'curator'];
-
-/** The queue; beside it, on wide screens, room for the view. */
-export function ReviewQueueScreen() {
-  const { sideBySide } = useBreakpoint();
-  return (
-    <RoleGate title="Review" roles={who}>
-      <Screen title="Review" sub="What waits for a decision, answered first, then oldest." list={sideBySide ? <ReviewList asPanel /> : undefined} onSheet={sideBySide}>
-        {sideBySide ? <Text tone="inkSoft">Choose a submission from the list.</Text> : <ReviewList />}
-      </Screen>
-    </RoleGate>
-  );
-}
-
+/** One submission as its reviewer sees it. */
 export function ReviewScreen({ id }: { id: string }) {
   return (
-    <RoleGate title="Review" roles={who}>
+    <RoleGate title="Review" roles={reviewRoles}>
       <OneReview key={id} id={id} />
     </RoleGate>
   );
