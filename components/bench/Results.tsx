@@ -1,6 +1,6 @@
 import { View } from 'react-native';
 import type { CheckResult } from '../../shared/contracts/checks';
-import { formatInterval, formatP, formatQuantity, type QuantityKind } from '../../shared/domain/quantityText';
+import { formatInterval, formatQuantity, type QuantityKind } from '../../shared/domain/quantityText';
 import type { Quantity as Estimated } from '../../shared/domain/quantity';
 import type { SampleEstimate } from '../../shared/domain/sampleTypes';
 import { CheckList, type CheckRow } from '../marks/CheckList';
@@ -10,6 +10,7 @@ import { KeyValueRows, type KeyValue } from '../ui/KeyValueRows';
 import { NumberField } from '../ui/TextField';
 import { Section } from '../ui/Section';
 import { Text } from '../ui/Text';
+import { dispersionSentence } from './dispersionSentence';
 import type { Bench } from './useBench';
 
 /** What follows from the counts, at once: estimates with their intervals, what is still needed, and every check. */
@@ -81,17 +82,6 @@ function intervalText({ lower, upper, standardError }: Estimated, kind: Quantity
   if (lower === null || upper === null) return undefined;
   const text = (value: number) => formatQuantity({ value: standardError && kind !== 'fraction' ? Number(value.toPrecision(4)) : value, kind: kind === 'density' ? 'density' : 'count', unit: '' })?.text ?? '–';
   return `95 % ${text(lower)} to ${text(upper)}`;
-}
-
-const NUMBER_WORDS = ['no', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine', 'ten', 'eleven', 'twelve'];
-
-/** What the spread of the aliquots says; few of them never prove the absence of clumps. */
-export function dispersionSentence({ dispersion, aliquotsCounted, checks }: SampleEstimate): string | null {
-  if (dispersion === null) return aliquotsCounted === 1 ? 'One aliquot shows nothing of the error between aliquots.' : null;
-  const said = checks.find(({ code }) => code === 'excess-cv');
-  const few = NUMBER_WORDS[aliquotsCounted] ?? String(aliquotsCounted);
-  const words = said?.level === 'warns' ? 'more than counting error explains' : `no sign of clumping; ${few} aliquots show little`;
-  return `Dispersion ${dispersion.statistic.toPrecision(3)} on ${dispersion.df} df, ${formatP(dispersion.p)}: ${words}.`;
 }
 
 function Aliquots({ estimate, bench }: { estimate: SampleEstimate; bench: Bench }) {
