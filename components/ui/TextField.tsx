@@ -73,6 +73,7 @@ export function TextField(props: TextFieldProps) {
           onBlur={onBlur}
           onSubmitEditing={onSubmit}
           placeholder={placeholder}
+          placeholderTextColor={colour.inkSoft}
           editable={!disabled && !readOnly}
           secureTextEntry={secret}
           multiline={rows !== undefined}
@@ -130,6 +131,7 @@ export function SearchField({ label, value, onChangeText, placeholder, onSubmit 
         onChangeText={onChangeText}
         onSubmitEditing={onSubmit}
         placeholder={placeholder}
+        placeholderTextColor={colour.inkSoft}
         inputMode="search"
         role="searchbox"
         aria-label={label}

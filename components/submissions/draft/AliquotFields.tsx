@@ -44,8 +44,8 @@ export function AliquotFields({ path, sample, onChange }: AliquotFieldsProps) {
   const patch = (index: number, part: Partial<Aliquot>) => onChange(sample.aliquots.map((entry, at) => (at === index ? { ...entry, ...part } : entry)));
   const columns: TableColumn<AliquotRow>[] = [
     { key: 'number', head: 'aliquot', width: wide ? 60 : 48, cell: (row) => <Text size="table">{String(row.index + 1)}</Text> },
-    { key: 'nuclei', head: 'nuclei', tone: 'cells', align: 'end', width: wide ? 120 : 92, cell: (row) => <CountCell path={`${path}.${row.index}.nuclei`} label={`Nuclei, aliquot ${row.index + 1}`} value={row.entry.nuclei} onChange={(nuclei) => patch(row.index, { nuclei })} strong /> },
-    { key: 'squares', head: 'squares', align: 'end', width: wide ? 90 : 68, cell: (row) => <CountCell path={`${path}.${row.index}.squares`} label={`Squares, aliquot ${row.index + 1}`} value={row.entry.squares} onChange={(squares) => patch(row.index, { squares })} /> },
+    { key: 'nuclei', head: 'nuclei', tone: 'cells', align: 'end', cell: (row) => <CountCell width={wide ? 110 : 92} path={`${path}.${row.index}.nuclei`} label={`Nuclei, aliquot ${row.index + 1}`} value={row.entry.nuclei} onChange={(nuclei) => patch(row.index, { nuclei })} strong /> },
+    { key: 'squares', head: 'squares', align: 'end', cell: (row) => <CountCell width={wide ? 76 : 62} path={`${path}.${row.index}.squares`} label={`Squares, aliquot ${row.index + 1}`} value={row.entry.squares} onChange={(squares) => patch(row.index, { squares })} /> },
     { key: 'volume', head: 'volume', align: 'end', nowrap: true, phone: 'hide', cell: (row) => <Text size="table" tone="inkSoft">{row.volumeMl === null ? '–' : `${Number((row.volumeMl * 1000).toPrecision(4))} µL`}</Text> },
     { key: 'density', head: wide ? 'nuclei per mL' : 'per mL', align: 'end', nowrap: true, cell: (row) => <Density row={row} /> },
   ];
@@ -73,12 +73,14 @@ export function AliquotFields({ path, sample, onChange }: AliquotFieldsProps) {
   );
 }
 
-function CountCell({ path, label, value, onChange, strong }: { path: string; label: string; value: string; onChange: (text: string) => void; strong?: boolean }) {
+function CountCell({ path, label, value, onChange, strong, width }: { path: string; label: string; width: number; value: string; onChange: (text: string) => void; strong?: boolean }) {
   const found = useFieldChecks(path);
   return (
-    <FieldPlace path={path}>
-      <NumberField label={label} labelHidden messageHidden {...found} value={value} maxLength={20} onChangeText={onChange} whole align="right" strong={strong} />
-    </FieldPlace>
+    <View style={{ width, marginLeft: 'auto' }}>
+      <FieldPlace path={path}>
+        <NumberField label={label} labelHidden messageHidden {...found} value={value} maxLength={20} onChangeText={onChange} whole align="right" strong={strong} />
+      </FieldPlace>
+    </View>
   );
 }
 

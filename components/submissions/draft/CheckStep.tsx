@@ -80,16 +80,17 @@ interface FindingProps {
 function Finding({ check, content, onReach, word, onWord }: FindingProps) {
   const { colour } = useTheme();
   const { tried } = useDraftContext();
+  const { wide } = useBreakpoint();
   const name = fieldName(check.path, content);
   const unsaid = onWord !== undefined && (word ?? '').trim() === '';
   return (
     <View role="group" aria-label={`${check.code.replaceAll('-', ' ')} at ${name}`} style={{ flexDirection: 'row', gap: 10, paddingVertical: 8, borderBottomWidth: 1, borderBottomColor: colour.hairline }}>
-      <View style={{ paddingTop: 4 }}>
+      <View style={{ paddingTop: 6 }}>
         <Sign name={check.level === 'blocks' ? 'cross' : 'ring'} tone="flagged" />
       </View>
       <View style={{ flex: 1, minWidth: 0, gap: 4 }}>
         <View style={{ flexDirection: 'row', flexWrap: 'wrap', columnGap: 12, justifyContent: 'space-between', alignItems: 'center' }}>
-          <Button kind="quiet" label={name} spokenLabel={`Go to ${name}`} onPress={() => onReach(check.path)} style={{ marginLeft: -8, flexShrink: 1 }} />
+          <Button kind="quiet" label={name} spokenLabel={`Go to ${name}`} onPress={() => onReach(check.path)} style={{ marginLeft: -8, marginVertical: wide ? -6 : -8, flexShrink: 1 }} />
           {check.figure ? <Text size="secondary" tone="inkSoft">{check.limit ? `${check.figure}, expected ${check.limit}` : check.figure}</Text> : null}
         </View>
         <Text size="table">{check.message}</Text>

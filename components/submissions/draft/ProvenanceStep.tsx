@@ -2,6 +2,7 @@ import { View } from 'react-native';
 import type { SubmissionContent } from '../../../shared/contracts/content';
 import { approvalKinds, overlapKinds } from '../../../shared/contracts/vocabulary';
 import { useAccount } from '../../queries/account';
+import { readingWidth } from '../../theme/tokens';
 import { Button } from '../../ui/Button';
 import { Checkbox } from '../../ui/Checkbox';
 import { Hint } from '../../ui/Hint';
@@ -30,13 +31,17 @@ export function ProvenanceStep({ kind, provenance, onChange }: ProvenanceStepPro
         <>
           <Section title="Publication" style={{ gap: 12 }}>
             <FieldPlace path="provenance.published">
-              <SegmentedChoice label="Are these counts published?" value={provenance.published ? 'yes' : 'no'} options={[{ value: 'no', label: 'not published' }, { value: 'yes', label: 'published' }]} onChange={(answer) => onChange({ published: answer === 'yes' })} />
+              <View style={{ maxWidth: 400 }}>
+                <SegmentedChoice label="Are these counts published?" value={provenance.published ? 'yes' : 'no'} options={[{ value: 'no', label: 'not published' }, { value: 'yes', label: 'published' }]} onChange={(answer) => onChange({ published: answer === 'yes' })} />
+              </View>
             </FieldPlace>
             <FieldGrid least={260}>
-              <DraftText path="provenance.doi" label="DOI of the publication" placeholder="10.1234/abc" value={provenance.doi} maxLength={200} onChange={(doi) => onChange({ doi })} />
+              <DraftText path="provenance.doi" label="DOI of the publication" hint="It begins with 10." value={provenance.doi} maxLength={200} onChange={(doi) => onChange({ doi })} />
               <DraftText path="provenance.protocolDoi" label="Protocol DOI" value={provenance.protocolDoi} maxLength={200} onChange={(protocolDoi) => onChange({ protocolDoi })} />
             </FieldGrid>
-            <DraftText path="provenance.citation" label="Citation" rows={2} value={provenance.citation} maxLength={4000} hint="Where there is no DOI." onChange={(citation) => onChange({ citation })} />
+            <View style={{ maxWidth: readingWidth }}>
+              <DraftText path="provenance.citation" label="Citation" rows={2} value={provenance.citation} maxLength={4000} hint="Where there is no DOI." onChange={(citation) => onChange({ citation })} />
+            </View>
           </Section>
           <Section title="Approval" style={{ gap: 12 }}>
             <FieldGrid least={260}>
@@ -50,7 +55,7 @@ export function ProvenanceStep({ kind, provenance, onChange }: ProvenanceStepPro
       ) : null}
       <Section title="When it may be shown" style={{ gap: 12 }}>
         <FieldGrid least={260}>
-          <DraftText path="provenance.embargoUntil" label="Embargo until" placeholder="2027-03-01" maxLength={10} hint="Year-month-day, or empty. Reviewed and approved as usual; in no version and no public answer before that day." value={provenance.embargoUntil} onChange={(embargoUntil) => onChange({ embargoUntil })} />
+          <DraftText path="provenance.embargoUntil" label="Embargo until" placeholder="YYYY-MM-DD" maxLength={10} hint="A day, or empty. Reviewed and approved as usual; in no version and no public answer before that day." value={provenance.embargoUntil} onChange={(embargoUntil) => onChange({ embargoUntil })} />
         </FieldGrid>
       </Section>
       <Licence kind={kind} accepted={provenance.licenceAccepted} onChange={(licenceAccepted) => onChange({ licenceAccepted })} />

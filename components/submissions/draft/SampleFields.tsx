@@ -35,7 +35,7 @@ export function SampleFields({ path, sample, structure, onChange }: SampleFields
         <DraftText path={`${path}.label`} label="Portion label" hint="Whole, frontal half, slab 3." value={sample.label} maxLength={200} onChange={(label) => onChange({ label })} />
       </FieldGrid>
       <ScaleUp path={path} sample={sample} onChange={onChange} />
-      <FieldGrid least={220}>
+      <FieldGrid least={280}>
         <DraftChoice path={`${path}.chamber.key`} label="Counting chamber" hint={chamber?.note} value={sample.chamber.key} options={chamberOptions} onChange={(key) => onChange({ chamber: { ...sample.chamber, key } })} />
         {chamber?.squareVolumeMl == null ? <DraftQuantity path={`${path}.chamber.squareVolume`} label="Volume of one square" value={sample.chamber.squareVolume} units={volumeUnits} onChange={(squareVolume) => onChange({ chamber: { ...sample.chamber, squareVolume } })} /> : null}
       </FieldGrid>
@@ -53,10 +53,10 @@ export function SampleFields({ path, sample, structure, onChange }: SampleFields
         <NeunFields path={`${path}.neun`} fields={sample.neun} onChange={(neun) => onChange({ neun })} />
       </View>
       <FieldGrid least={150}>
-        <DraftText path={`${path}.countedOn`} label="Date of counting" placeholder="2026-11-24" hint="Year-month-day." value={sample.countedOn} maxLength={10} onChange={(countedOn) => onChange({ countedOn })} />
+        <DraftText path={`${path}.countedOn`} label="Date of counting" placeholder="YYYY-MM-DD" value={sample.countedOn} maxLength={10} onChange={(countedOn) => onChange({ countedOn })} />
         <DraftText path={`${path}.observer`} label="Observer" value={sample.observer} maxLength={200} onChange={(observer) => onChange({ observer })} />
         <DraftText path={`${path}.secondObserver`} label="Second observer" value={sample.secondObserver} maxLength={200} onChange={(secondObserver) => onChange({ secondObserver })} />
-        <DraftText path={`${path}.antibodyRrid`} label="Antibody RRID" placeholder="RRID:AB_2298772" value={sample.antibodyRrid} maxLength={200} onChange={(antibodyRrid) => onChange({ antibodyRrid })} />
+        <DraftText path={`${path}.antibodyRrid`} label="Antibody RRID" placeholder="RRID:" value={sample.antibodyRrid} maxLength={200} onChange={(antibodyRrid) => onChange({ antibodyRrid })} />
       </FieldGrid>
       <Further path={path} sample={sample} onChange={onChange} />
     </View>
@@ -75,7 +75,7 @@ function ScaleUp({ path, sample, onChange }: PartProps) {
   return (
     <FieldPlace path={`${path}.scaleUp`}>
       <View style={{ gap: 10 }}>
-        <FieldGrid least={220}>
+        <FieldGrid least={280}>
           <DraftChoice path={`${path}.scaleUp.kind`} label="Scale-up" value={scaleUp.kind} options={optionsOf(scaleUpKinds, { none: 'none: all of it was dissociated' })} onChange={chooseKind} />
           {byFactor ? <DraftNumber path={`${path}.scaleUp.factor`} label="Scale-up factor" hint="Whole ÷ counted, 1 or more." value={scaleUp.factor} maxLength={20} onChange={(factor) => set({ factor })} /> : null}
           {byFactor ? <DraftNumber path={`${path}.scaleUp.factorSe`} label="Error of the scale-up factor" value={scaleUp.factorSe} maxLength={20} onChange={(factorSe) => set({ factorSe })} /> : null}

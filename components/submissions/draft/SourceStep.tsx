@@ -17,8 +17,8 @@ export function SourceStep({ content, change }: LiteraturePartProps) {
     <View style={{ gap: 24 }}>
       <Section title="Source" style={{ gap: 12 }}>
         <FieldGrid least={260}>
-          <DraftText path="source.doi" label="DOI of the source" placeholder="10.1234/abc" value={source.doi} maxLength={200} onChange={(doi) => set({ doi })} />
-          <DraftText path="source.year" label="Year" placeholder="2014" inputMode="numeric" value={source.year} maxLength={4} onChange={(year) => set({ year })} />
+          <DraftText path="source.doi" label="DOI of the source" hint="It begins with 10." value={source.doi} maxLength={200} onChange={(doi) => set({ doi })} />
+          <DraftText path="source.year" label="Year" inputMode="numeric" value={source.year} maxLength={4} onChange={(year) => set({ year })} />
         </FieldGrid>
         <DraftText path="source.citation" label="Citation of the source" rows={3} value={source.citation} maxLength={1000} hint="Authors, year, title, where it was published." onChange={(citation) => set({ citation })} />
       </Section>

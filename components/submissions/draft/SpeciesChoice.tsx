@@ -30,7 +30,7 @@ export function SpeciesChoice({ path, value, onChange }: SpeciesChoiceProps) {
   const choose = (taxon: Taxon) => onChange({ taxon: taxon.slug, nameAsEntered: value.nameAsEntered.trim() === '' ? taxon.name : value.nameAsEntered });
   return (
     <View style={{ gap: 14 }}>
-      <FieldPlace path={`${path}.taxon`}>{value.taxon === '' ? <SpeciesSearch path={`${path}.taxon`} onChoose={choose} /> : <ChosenSpecies path={`${path}.taxon`} slug={value.taxon} onClear={() => onChange({ taxon: '' })} />}</FieldPlace>
+      <FieldPlace path={`${path}.taxon`}>{value.taxon === '' ? <SpeciesSearch path={`${path}.taxon`} onChoose={choose} /> : <ChosenSpecies path={`${path}.taxon`} slug={value.taxon} name={value.nameAsEntered} onClear={() => onChange({ taxon: '' })} />}</FieldPlace>
       <FieldGrid>
         <DraftText path={`${path}.nameAsEntered`} label="Name as entered" hint="As your label or the paper says it; it is kept beside the species." value={value.nameAsEntered} maxLength={200} onChange={(nameAsEntered) => onChange({ nameAsEntered })} />
         <DraftChoice path={`${path}.qualifier`} label="Name qualifier" value={value.qualifier} options={optionsOf(nameQualifiers)} onChange={(qualifier) => onChange({ qualifier })} />
@@ -39,14 +39,14 @@ export function SpeciesChoice({ path, value, onChange }: SpeciesChoiceProps) {
   );
 }
 
-function ChosenSpecies({ path, slug, onClear }: { path: string; slug: string; onClear: () => void }) {
+function ChosenSpecies({ path, slug, name, onClear }: { path: string; slug: string; name: string; onClear: () => void }) {
   const { colour } = useTheme();
   const taxon = useTaxon(slug);
   const { error } = useFieldChecks(path);
   return (
     <View style={{ gap: 4, paddingLeft: 12, borderLeftWidth: 3, borderLeftColor: error ? colour.flagged : colour.cresyl }}>
       <Row justify="space-between" wrap>
-        <Binomial name={taxon.data?.name ?? slug.replace('-', ' ')} />
+        <Binomial name={taxon.data?.name ?? (name || slug.replace('-', ' '))} />
         <Button kind="quiet" label="Choose another species" onPress={onClear} />
       </Row>
       {taxon.data ? (

@@ -17,14 +17,14 @@ export function SpecimenStep({ content, change }: SpecimenPartProps) {
   const { specimen } = content;
   const set = (patch: Partial<SpecimenContent['specimen']>) => change((now) => ({ ...now, specimen: { ...now.specimen, ...patch } }));
   const human = specimen.taxon === 'homo-sapiens';
-  const dateHint = human ? 'Of a human donor the year alone.' : 'Year-month-day.';
+  const dateHint = human ? 'Of a human donor the year alone.' : undefined;
   return (
     <View style={{ gap: 24 }}>
       <Section title="Species" style={{ gap: 12 }}>
         <SpeciesChoice path="specimen" value={specimen} onChange={set} />
       </Section>
       <Section title="Animal" style={{ gap: 12 }}>
-        <FieldGrid>
+        <FieldGrid pairs>
           <DraftText path="specimen.code" label="Specimen code" hint={human ? 'No hospital code and no initials.' : 'Unique in your laboratory.'} value={specimen.code} maxLength={60} onChange={(code) => set({ code })} />
           <DraftChoice path="specimen.origin" label="Origin" value={specimen.origin} options={optionsOf(origins)} onChange={(origin) => set({ origin })} />
           <DraftText path="specimen.strain" label="Strain or breed" value={specimen.strain} maxLength={200} onChange={(strain) => set({ strain })} />
@@ -36,9 +36,9 @@ export function SpecimenStep({ content, change }: SpecimenPartProps) {
         </FieldGrid>
       </Section>
       <Section title="Dates and places" style={{ gap: 12 }}>
-        <FieldGrid>
-          <DraftText path="specimen.diedOn" label="Date of death" hint={dateHint} value={specimen.diedOn} placeholder="2026-11-24" maxLength={10} onChange={(diedOn) => set({ diedOn })} />
-          <DraftText path="specimen.fixedOn" label="Date of fixation" hint={dateHint} value={specimen.fixedOn} placeholder="2026-11-24" maxLength={10} onChange={(fixedOn) => set({ fixedOn })} />
+        <FieldGrid pairs>
+          <DraftText path="specimen.diedOn" label="Date of death" hint={dateHint} value={specimen.diedOn} placeholder={human ? 'YYYY' : 'YYYY-MM-DD'} maxLength={10} onChange={(diedOn) => set({ diedOn })} />
+          <DraftText path="specimen.fixedOn" label="Date of fixation" hint={dateHint} value={specimen.fixedOn} placeholder={human ? 'YYYY' : 'YYYY-MM-DD'} maxLength={10} onChange={(fixedOn) => set({ fixedOn })} />
           <DraftText path="specimen.locality" label="Locality" hint="Coarse: a region or a tenth of a degree, no exact place of wild animals." value={specimen.locality} maxLength={200} onChange={(locality) => set({ locality })} />
           <DraftText path="specimen.voucher" label="Voucher" hint="Collection and number, where one is kept." value={specimen.voucher} maxLength={200} onChange={(voucher) => set({ voucher })} />
         </FieldGrid>

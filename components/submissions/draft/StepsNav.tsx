@@ -13,34 +13,41 @@ interface StepsNavProps {
   onGo: (step: StepKey) => void;
 }
 
-/** The steps along an axis, each a tick; the one you are in is the point. What is missing in a step stands raised beside it. */
+/**
+ * The steps along an axis, each a tick; the one you are in is the point. How much is open in a step stands beside its
+ * name. On a phone the ticks carry numbers, and the name of the current step stands under the axis.
+ */
 export function StepsNav({ steps, current, checks, onGo }: StepsNavProps) {
   const { wide } = useBreakpoint();
   const { colour } = useTheme();
+  const at = steps.findIndex((step) => step.key === current);
   return (
-    <View role="navigation" aria-label="Steps" style={{ flexDirection: 'row', flexWrap: 'wrap', borderTopWidth: wide ? 1.5 : 0, borderTopColor: colour.tick, columnGap: wide ? 0 : 14 }}>
-      {steps.map((step, index) => {
-        const on = step.key === current;
-        const { blocks, warns } = countOf(step.key, checks);
-        const spoken = `${step.label}${blocks > 0 ? `, ${blocks} missing or impossible` : ''}${warns > 0 ? `, ${warns} doubtful` : ''}`;
-        return (
-          <Pressable
-            key={step.key}
-            role="link"
-            aria-label={spoken}
-            aria-current={on ? 'step' : undefined}
-            onPress={() => onGo(step.key)}
-            style={{ minHeight: wide ? 48 : target.phone, justifyContent: 'center', flexGrow: wide ? 1 : 0, flexBasis: wide ? 0 : 'auto', borderTopWidth: wide ? 0 : 1.5, borderTopColor: colour.tick, paddingTop: 6 }}
-          >
-            <View style={{ position: 'absolute', top: wide ? -1 : -1.5, left: 0, width: 1.5, height: on ? 0 : 9, backgroundColor: colour.tick }} />
-            {on ? <View style={{ position: 'absolute', top: -6.5, left: 0, width: 11, height: 11, borderRadius: 6, backgroundColor: colour.cresyl }} /> : null}
-            <Text size={wide ? 'table' : 'least'} weight={on ? 'semibold' : 'regular'} tone={on ? 'ink' : 'inkSoft'}>
-              {`${index + 1} ${step.label}`}
-              {blocks + warns > 0 ? <Span tone={blocks > 0 ? 'waiting' : 'flagged'} weight="semibold">{`  ${blocks + warns}`}</Span> : null}
-            </Text>
-          </Pressable>
-        );
-      })}
+    <View style={{ gap: 2 }}>
+      <View role="navigation" aria-label="Steps" style={{ flexDirection: 'row', borderTopWidth: 1.5, borderTopColor: colour.tick, marginTop: 6 }}>
+        {steps.map((step, index) => {
+          const on = step.key === current;
+          const { blocks, warns } = countOf(step.key, checks);
+          const spoken = `${step.label}${blocks > 0 ? `, ${blocks} missing or impossible` : ''}${warns > 0 ? `, ${warns} doubtful` : ''}`;
+          return (
+            <Pressable key={step.key} role="link" aria-label={spoken} aria-current={on ? 'step' : undefined} onPress={() => onGo(step.key)} style={{ minHeight: wide ? 44 : target.phone, justifyContent: 'center', flexGrow: 1, flexBasis: wide ? 'auto' : 0, paddingTop: 6, paddingRight: 12 }}>
+              {on ? (
+                <View style={{ position: 'absolute', top: -6.5, left: 0, width: 11, height: 11, borderRadius: 6, backgroundColor: colour.cresyl }} />
+              ) : (
+                <View style={{ position: 'absolute', top: -1, left: 0, width: 1.5, height: 9, backgroundColor: colour.tick }} />
+              )}
+              <Text size="table" weight={on ? 'semibold' : 'regular'} tone={on ? 'ink' : 'inkSoft'} nowrap>
+                {wide ? `${index + 1} ${step.label}` : String(index + 1)}
+                {blocks + warns > 0 ? <Span tone={blocks > 0 ? 'waiting' : 'flagged'} weight="semibold" style={{ fontSize: 13 }}>{`  ${blocks + warns}`}</Span> : null}
+              </Text>
+            </Pressable>
+          );
+        })}
+      </View>
+      {wide ? null : (
+        <Text weight="semibold">
+          {`${at + 1} of ${steps.length} · ${steps[at]?.label ?? ''}`}
+        </Text>
+      )}
     </View>
   );
 }

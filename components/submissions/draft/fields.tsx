@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import { View } from 'react-native';
 import type { Entered } from '../../../shared/contracts/content';
+import { useBreakpoint } from '../../layout/useBreakpoint';
 import { Sign } from '../../ui/Sign';
 import { Element } from '../../ui/Element';
 import { Select, type SelectOption } from '../../ui/Select';
@@ -10,10 +11,15 @@ import { UnitChoice } from '../../ui/UnitChoice';
 import { useDraftContext, useFieldChecks } from './DraftContext';
 import { placeId } from './reachField';
 
-/** As many fields side by side as have room; two on a phone where they are short. */
-export function FieldGrid({ least = 200, children }: { least?: number; children: ReactNode }) {
+/** Two short fields side by side on a phone. */
+const PAIR_ON_PHONE = 150;
+
+/** As many fields side by side as have room; `pairs` puts two short ones side by side on a phone. */
+export function FieldGrid({ least = 200, pairs, children }: { least?: number; pairs?: boolean; children: ReactNode }) {
+  const { wide } = useBreakpoint();
+  const column = pairs && !wide ? PAIR_ON_PHONE : least;
   return (
-    <Element as="div" css={{ display: 'grid', gridTemplateColumns: `repeat(auto-fill, minmax(min(100%, ${least}px), 1fr))`, gap: '14px 16px', alignItems: 'start' }} nativeStyle={{ gap: 14 }}>
+    <Element as="div" css={{ display: 'grid', gridTemplateColumns: `repeat(auto-fill, minmax(min(100%, ${column}px), 1fr))`, gap: '14px 16px', alignItems: 'start' }} nativeStyle={{ gap: 14 }}>
       {children}
     </Element>
   );
