@@ -1,5 +1,6 @@
 const http = require('node:http');
 const { getDefaultConfig } = require('expo/metro-config');
+const { insteadOf } = require('./scripts/leaveOut.cjs');
 
 const config = getDefaultConfig(__dirname);
 
@@ -22,6 +23,14 @@ config.server.enhanceMiddleware = (middleware) => (request, response, next) => {
   );
   onward.on('error', () => response.writeHead(502).end('The server does not answer yet.'));
   request.pipe(onward);
+};
+
+const resolveAsUsual = config.resolver.resolveRequest;
+config.resolver.resolveRequest = (context, name, platform) => {
+  const resolve = resolveAsUsual ?? context.resolveRequest;
+  const instead = platform === 'web' ? insteadOf(context.originModulePath, name) : undefined;
+  if (instead === null) return { type: 'empty' };
+  return resolve(context, instead ?? name, platform);
 };
 
 module.exports = config;

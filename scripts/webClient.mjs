@@ -6,7 +6,7 @@ import { withLock } from './lock.mjs';
 import { runQuietly } from './steps.mjs';
 
 /** What the exported client is made of; a change in any of it makes the export stale. */
-const sources = ['app', 'components', 'shared', 'assets', 'app.json', 'package-lock.json', 'package.json', 'metro.config.cjs', 'tsconfig.json'];
+const sources = ['app', 'components', 'shared', 'assets', 'app.json', 'package-lock.json', 'package.json', 'metro.config.cjs', 'scripts/leaveOut.cjs', 'scripts/leftOut.cjs', 'tsconfig.json'];
 
 function filesOf(path) {
   if (!existsSync(path)) return [];

@@ -1,5 +1,5 @@
 import { useLocalSearchParams } from 'expo-router';
-import { FirstAccountScreen } from '../../components/account/FirstAccountScreen';
+import { FirstAccountScreen } from '../../components/layout/lazy/LazyScreens';
 
 export default function FirstAccountRoute() {
   const { token } = useLocalSearchParams<{ token?: string }>();

@@ -1,4 +1,4 @@
-import { ForgotPasswordScreen } from '../../components/account/PasswordScreens';
+import { ForgotPasswordScreen } from '../../components/layout/lazy/LazyScreens';
 
 export default function ForgotPasswordRoute() {
   return <ForgotPasswordScreen />;

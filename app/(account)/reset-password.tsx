@@ -1,5 +1,5 @@
 import { useLocalSearchParams } from 'expo-router';
-import { ResetPasswordScreen } from '../../components/account/PasswordScreens';
+import { ResetPasswordScreen } from '../../components/layout/lazy/LazyScreens';
 
 export default function ResetPasswordRoute() {
   const { token } = useLocalSearchParams<{ token?: string }>();

@@ -1,5 +1,5 @@
 import { useLocalSearchParams } from 'expo-router';
-import { SignInScreen } from '../../components/account/SignInScreen';
+import { SignInScreen } from '../../components/layout/lazy/LazyScreens';
 
 export default function SignInRoute() {
   const { next } = useLocalSearchParams<{ next?: string }>();

@@ -1,4 +1,4 @@
-import { SignUpScreen } from '../../components/account/SignUpScreen';
+import { SignUpScreen } from '../../components/layout/lazy/LazyScreens';
 
 export default function SignUpRoute() {
   return <SignUpScreen />;

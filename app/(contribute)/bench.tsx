@@ -1,4 +1,4 @@
-import { BenchScreen } from '../../components/bench/BenchScreen';
+import { BenchScreen } from '../../components/layout/lazy/LazyScreens';
 
 export default function BenchRoute() {
   return <BenchScreen />;

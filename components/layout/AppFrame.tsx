@@ -4,6 +4,7 @@ import { useAccount } from '../queries/account';
 import { useTheme } from '../theme/ThemeProvider';
 import { SkipLink } from '../ui/SkipLink';
 import { Bar } from './Bar';
+import { PageBoundary } from './PageBoundary';
 import { placeOfPath, placesFor } from './places';
 import { Rail } from './Rail';
 import { MAIN_ID } from './Screen';
@@ -22,7 +23,9 @@ export function AppFrame() {
       <SkipLink targetId={MAIN_ID} />
       {wide ? <Rail places={places} current={current} height={height} /> : null}
       <View style={{ flex: 1, minWidth: 0, minHeight: 0 }}>
-        <Slot />
+        <PageBoundary path={path}>
+          <Slot />
+        </PageBoundary>
       </View>
       {wide ? null : <Bar places={places} current={current} width={width} />}
     </View>

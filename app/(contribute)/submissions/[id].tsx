@@ -1,5 +1,5 @@
 import { useLocalSearchParams } from 'expo-router';
-import { SubmissionScreen } from '../../../components/submissions/SubmissionScreen';
+import { SubmissionScreen } from '../../../components/layout/lazy/LazyScreens';
 
 export default function SubmissionRoute() {
   const { id } = useLocalSearchParams<{ id: string }>();

@@ -1,5 +1,5 @@
 import { useLocalSearchParams } from 'expo-router';
-import { ReviewScreen } from '../../../components/review/ReviewScreens';
+import { ReviewScreen } from '../../../components/layout/lazy/LazyScreens';
 
 export default function ReviewRoute() {
   const { id } = useLocalSearchParams<{ id: string }>();

@@ -1,4 +1,4 @@
-import { ReviewQueueScreen } from '../../../components/review/ReviewScreens';
+import { ReviewQueueScreen } from '../../../components/review/ReviewQueueScreen';
 
 export default function ReviewQueueRoute() {
   return <ReviewQueueScreen />;

@@ -1,0 +1,4 @@
+/** Builds the page anew. */
+export function startAgain(render: () => void): void {
+  render();
+}
