@@ -9,7 +9,7 @@ import { createContext, StartError } from '../server/startup';
  * none yet. What is loaded already is left as it is.
  */
 async function load(): Promise<void> {
-  const { context, close } = await createContext(loadConfig(process.env), process.env);
+  const { context, close } = await createContext(loadConfig(process.env));
   try {
     await seedVocabularies(context);
     await seedPublished(context);

@@ -14,7 +14,7 @@ const graceMs = 8_000;
 
 async function start(): Promise<void> {
   const config = loadConfig(process.env);
-  const { context, close } = await createContext(config, process.env);
+  const { context, close } = await createContext(config);
   const auth = createAuth(context);
   const server = createServer(buildApp(context, auth));
   await new Promise<void>((resolve, reject) => {

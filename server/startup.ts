@@ -16,7 +16,7 @@ export class StartError extends Error {}
  * Wires the world once: migrated database, services by their SDK, queue. Demo mode is chosen by the first start on an
  * empty database and stands from then on.
  */
-export async function createContext(config: Config, environment: NodeJS.ProcessEnv): Promise<{ context: Context; close: () => Promise<void> }> {
+export async function createContext(config: Config): Promise<{ context: Context; close: () => Promise<void> }> {
   const logger = createLogger(config.logLevel);
   await migrateDatabase(config.databaseUrl);
   const { db, pool } = openDatabase(config.databaseUrl, (error) => logger.error({ err: error }, 'database connection lost'));
@@ -39,7 +39,7 @@ export async function createContext(config: Config, environment: NodeJS.ProcessE
     mailer: connectMailer(config.mail),
     storage,
     jobs: createJobQueue(config.databaseUrl, logger),
-    killPoint: createKillPoint(config.killAt, environment['KARYA_KILL_LOG']),
+    killPoint: createKillPoint(config.killAt, config.killLog),
     demo,
   };
   return {

@@ -5,6 +5,7 @@ import { ageText } from '../layout/timeText';
 import { BinomialSpan } from '../marks/Binomial';
 import { CladeMark } from '../marks/CladeMark';
 import { DemoMark } from '../marks/DemoMark';
+import { useAccount } from '../queries/account';
 import { errorInWords } from '../queries/errorInWords';
 import { useReviewQueue } from '../queries/review';
 import { useTheme } from '../theme/ThemeProvider';
@@ -18,6 +19,7 @@ import { TextLink } from '../ui/TextLink';
 /** What waits for a decision, answered first, then oldest. Beside the view on wide screens, a page of its own on a phone. */
 export function ReviewList({ currentId, asPanel }: { currentId?: string; asPanel?: boolean }) {
   const queue = useReviewQueue();
+  const { labName } = useAccount();
   const count = queue.data?.items.length ?? 0;
   return (
     <View style={{ flex: asPanel ? 1 : undefined, paddingTop: asPanel ? 24 : 0 }}>
@@ -42,7 +44,7 @@ export function ReviewList({ currentId, asPanel }: { currentId?: string; asPanel
         {(page) => (
           <View role="list">
             {page.items.map((item) => (
-              <QueueRow key={item.id} item={item} current={item.id === currentId} inset={asPanel ? 20 : 0} />
+              <QueueRow key={item.id} item={item} current={item.id === currentId} ownLab={labName !== null && item.lab === labName} inset={asPanel ? 20 : 0} />
             ))}
           </View>
         )}
@@ -54,7 +56,7 @@ export function ReviewList({ currentId, asPanel }: { currentId?: string; asPanel
   );
 }
 
-function QueueRow({ item, current, inset }: { item: SubmissionItem; current: boolean; inset: number }) {
+function QueueRow({ item, current, ownLab, inset }: { item: SubmissionItem; current: boolean; ownLab: boolean; inset: number }) {
   const { colour } = useTheme();
   return (
     <View role="listitem" style={{ position: 'relative', paddingHorizontal: inset, paddingVertical: 12, gap: 2, borderBottomWidth: 1, borderBottomColor: colour.hairline, backgroundColor: current ? colour.sheet : 'transparent' }}>
@@ -79,6 +81,11 @@ function QueueRow({ item, current, inset }: { item: SubmissionItem; current: boo
           </Text>
         ) : null}
       </Row>
+      {ownLab ? (
+        <Text size="secondary" tone="inkSoft">
+          own laboratory: others decide
+        </Text>
+      ) : null}
       {item.demonstration ? <DemoMark /> : null}
     </View>
   );

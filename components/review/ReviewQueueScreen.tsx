@@ -10,8 +10,14 @@ export function ReviewQueueScreen() {
   const { sideBySide } = useBreakpoint();
   return (
     <RoleGate title="Review" roles={reviewRoles}>
-      <Screen title="Review" sub="What waits for a decision, answered first, then oldest." list={sideBySide ? <ReviewList asPanel /> : undefined} onSheet={sideBySide}>
-        {sideBySide ? <Text tone="inkSoft">Choose a submission from the list.</Text> : <ReviewList />}
+      <Screen
+        title="Review"
+        heading={sideBySide ? 'Choose a submission' : undefined}
+        sub={sideBySide ? undefined : 'What waits for a decision, answered first, then oldest.'}
+        list={sideBySide ? <ReviewList asPanel /> : undefined}
+        onSheet={sideBySide}
+      >
+        {sideBySide ? <Text tone="inkSoft">The list at the left holds what waits for a decision.</Text> : <ReviewList />}
       </Screen>
     </RoleGate>
   );
