@@ -19,7 +19,8 @@ export function createQueryClient(): QueryClient {
         retry: (failures, error) => failures < TRIES && isPassing(error),
         refetchOnWindowFocus: false,
       },
-      mutations: { retry: false },
+      // Without a network an act fails at once and says so, instead of waiting unseen for its return.
+      mutations: { retry: false, networkMode: 'always' },
     },
   });
 }
