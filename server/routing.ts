@@ -4,6 +4,7 @@ import type { FieldError } from '../shared/contracts/problems';
 import type { Actor, Context } from './context';
 import { AppError, notFound } from './errors';
 import { isPermitted, neededRoles, permissions, type Action } from './permissions';
+import { unstorableTexts } from './unstorable';
 
 type Method = 'get' | 'post' | 'patch' | 'put' | 'delete';
 
@@ -74,8 +75,9 @@ export function fieldErrorsOf(error: z.ZodError, input: unknown): FieldError[] {
 /** Parses or throws `invalid-input` with every problem. */
 export function parseInput<T>(schema: z.ZodType<T>, input: unknown, what: string): T {
   const parsed = schema.safeParse(input);
-  if (parsed.success) return parsed.data;
-  const errors = fieldErrorsOf(parsed.error, input);
+  const unstorable = unstorableTexts(input);
+  if (parsed.success && unstorable.length === 0) return parsed.data;
+  const errors = [...(parsed.success ? [] : fieldErrorsOf(parsed.error, input)), ...unstorable];
   throw new AppError('invalid-input', `${errors.length === 1 ? 'One entry' : `${errors.length} entries`} of the ${what} cannot be used.`, { errors });
 }
 
