@@ -117,10 +117,23 @@ function Aliquots({ estimate, bench }: { estimate: SampleEstimate; bench: Bench 
   );
 }
 
+/** Names of the checks a sample meets, in the words of the bench. */
+const names: Readonly<Record<string, string>> = {
+  'aliquot-cv': 'CV between aliquots',
+  'few-aliquots': 'aliquots counted',
+  'excess-cv': 'CV beyond counting error',
+  'dispersion-too-small': 'aliquots alike',
+  'nuclei-per-square': 'nuclei per square',
+  'volume-of-one-square': 'counted volume and squares',
+  'few-neun-nuclei': 'nuclei scored for NeuN',
+  'neun-fields-disagree': 'NeuN fields agree',
+  'neun-near-the-ends': 'NeuN-positive fraction',
+};
+
 const order = { blocks: 0, warns: 1, passes: 2 } as const;
 
 function checkRows(checks: readonly CheckResult[]): CheckRow[] {
   return [...checks]
     .sort((a, b) => order[a.level] - order[b.level])
-    .map(({ code, path, level, figure, limit, message }, index) => ({ key: `${code} ${path} ${index}`, level, name: code.replaceAll('-', ' '), figure: figure ?? undefined, limit: limit ?? undefined, sentence: level === 'passes' ? undefined : message }));
+    .map(({ code, path, level, figure, limit, message }, index) => ({ key: `${code} ${path} ${index}`, level, name: names[code] ?? code.replaceAll('-', ' '), figure: figure ?? undefined, limit: limit ?? undefined, sentence: level === 'passes' ? undefined : message }));
 }

@@ -12,6 +12,9 @@ import { NumberField } from '../ui/TextField';
 import { UnitChoice } from '../ui/UnitChoice';
 import type { Bench } from './useBench';
 
+/** The colon form is read in two ways; its parts do not break over lines. */
+const DILUTION_HINT = 'final ÷ original volume: 5, not 1\u00a0:\u00a05';
+
 const sideWords: Record<(typeof sides)[number], string> = { left: 'left', right: 'right', both: 'both', midline: 'midline', 'not-stated': 'not stated' };
 const scaleUpWords: Record<(typeof scaleUpKinds)[number], string> = { none: 'none, as counted', 'other-side': 'to the other side (×2)', 'mass-fraction': 'by a fraction of the mass', 'slab-series': 'from a series of slabs' };
 
@@ -48,7 +51,7 @@ export function SampleFields({ bench }: { bench: Bench }) {
           />
         </Pair>
         <Pair>
-          <NumberField label="dilution" grow value={sample.dilution} onChangeText={(dilution) => setSample({ dilution })} hint="final ÷ original volume: 5, not 1 : 5" error={problems['dilution']} />
+          <NumberField label="dilution" grow value={sample.dilution} onChangeText={(dilution) => setSample({ dilution })} hint={DILUTION_HINT} error={problems['dilution']} />
           <Select label="side counted" grow value={sample.side ?? ''} placeholder="choose" options={sides.map((side) => ({ value: side, label: sideWords[side] }))} onChange={(side) => setSample({ side })} />
         </Pair>
         <Pair stacked={!wide}>

@@ -53,11 +53,13 @@ export function readBench({ sample, targetCv }: BenchEntry): BenchReading {
   read.problems.forEach(keep);
   const targetProblem = target.problem ?? (target.value !== null && !(target.value > 0 && target.value <= 1) ? 'The CV aimed at lies above 0 and is at most 1; 0.05 is usual.' : null);
   if (targetProblem) problems['targetCv'] = targetProblem;
-  const input = read.input ? { ...read.input, targetCv: targetProblem ? null : target.value } : null;
+  const missing = missingWords(sample);
+  // A text that cannot be read would leave its number out, and the rest would be a wrong one.
+  const input = read.input && read.problems.length === 0 && missing.length === 0 ? { ...read.input, targetCv: targetProblem ? null : target.value } : null;
   const estimate = input ? estimateSample(input, { side: sample.side, prefix: `${at}.` }) : null;
   // What a number cannot be is said at its field too.
   for (const check of estimate?.checks ?? []) if (check.level === 'blocks' && check.path.startsWith(`${at}.`)) keep({ path: entryPath(check.path, read.aliquotPaths, read.neunPaths), message: check.message });
-  return { input, estimate, problems, missing: missingWords(sample) };
+  return { input, estimate, problems, missing };
 }
 
 /** The check counts aliquots and fields that were read; the form counts all of its rows. */
@@ -73,6 +75,7 @@ function entryPath(path: string, aliquotPaths: readonly string[], neunPaths: rea
 function missingWords(sample: SampleEntry): string[] {
   return [
     sample.suspensionVolume.text.trim() === '' ? 'the suspension volume' : null,
+    sample.dilution.trim() === '' ? 'the dilution, 1 where there was none' : null,
     sample.chamber.key === 'other' && sample.chamber.squareVolume.text.trim() === '' ? 'the volume of one square' : null,
     sample.aliquots.every(({ nuclei, excluded }) => nuclei.trim() === '' || excluded !== null) ? 'the nuclei of one aliquot' : null,
   ].filter((word) => word !== null);

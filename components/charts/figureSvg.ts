@@ -17,12 +17,14 @@ export interface FigureColours {
 const EDGE = 20;
 const TITLE_HEIGHT = 44;
 const LINE_HEIGHT = 18;
+/** Widths are estimated, and Lora runs a little wider. */
+const WIDTH_KEPT = 0.94;
 
 /** Breaks a paragraph into lines that fit a width in px at a font size. */
 export function wrapText(text: string, width: number, fontSize: number): string[] {
   const lines: string[] = [];
   let line = '';
-  for (const word of text.split(' ')) {
+  for (const word of text.split(' ').flatMap((whole) => piecesOf(whole, width, fontSize))) {
     const longer = line === '' ? word : `${line} ${word}`;
     if (line !== '' && textWidth(longer, fontSize) > width) {
       lines.push(line);
@@ -30,6 +32,20 @@ export function wrapText(text: string, width: number, fontSize: number): string[
     } else line = longer;
   }
   return line === '' ? lines : [...lines, line];
+}
+
+/** A word longer than a line, an address for instance, in pieces that fit. */
+function piecesOf(word: string, width: number, fontSize: number): string[] {
+  const pieces: string[] = [];
+  let piece = '';
+  for (const character of word) {
+    if (piece !== '' && textWidth(piece + character, fontSize) > width) {
+      pieces.push(piece);
+      piece = '';
+    }
+    piece += character;
+  }
+  return [...pieces, piece];
 }
 
 export function escapeXml(text: string): string {
@@ -42,7 +58,7 @@ export function escapeXml(text: string): string {
  */
 export function composeFigureSvg(drawing: string, size: { width: number; height: number }, caption: FigureCaption, colours: FigureColours, fontFaces: string): { svg: string; width: number; height: number } {
   const width = size.width + 2 * EDGE;
-  const lines = caption.lines.flatMap((line) => wrapText(line, size.width, 13));
+  const lines = caption.lines.flatMap((line) => wrapText(line, size.width * WIDTH_KEPT, 13));
   const titleLines = wrapText(caption.title, size.width, 19);
   const top = TITLE_HEIGHT + (titleLines.length - 1) * 26;
   const height = Math.round(top + size.height + lines.length * LINE_HEIGHT + 2 * EDGE);

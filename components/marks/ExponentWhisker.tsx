@@ -98,7 +98,7 @@ export function ExponentAxis({ scale = exponentScale, width: asked }: { scale?: 
   const xOf = xOfExponent(scale, width);
   return (
     <View style={{ width, height: 20 }} aria-hidden={true}>
-      {[1, 1.5].map((exponent) => (
+      {[1, 1.5].filter((exponent) => exponent === 1 || xOf(exponent) - xOf(1) >= 20).map((exponent) => (
         <View key={exponent} style={{ position: 'absolute', left: xOf(exponent) - 20, width: 40 }}>
           <Text size="secondary" tone="inkSoft" align="center">
             {exponent}

@@ -1,5 +1,6 @@
-import type { Variable } from '../../shared/contracts/vocabulary';
-import { variables } from '../../shared/contracts/vocabulary';
+import { View } from 'react-native';
+import { variables, type Variable } from '../../shared/contracts/vocabulary';
+import { useBreakpoint } from '../layout/useBreakpoint';
 import { useStructures } from '../queries/register';
 import { Select } from '../ui/Select';
 import { Stack } from '../ui/Row';
@@ -15,15 +16,17 @@ const options = variables.map((variable) => ({ value: variable, label: variableC
 
 /** Vertical and horizontal axis: which variable of which structure. */
 export function AxisChoice({ choice, change }: AxisChoiceProps) {
+  const { wide } = useBreakpoint();
   return (
-    <>
+    <View style={{ flexDirection: wide ? 'column' : 'row', gap: 16 }}>
       <OneAxis axis="y" choice={choice} change={change} />
       <OneAxis axis="x" choice={choice} change={change} />
-    </>
+    </View>
   );
 }
 
 function OneAxis({ axis, choice, change }: AxisChoiceProps & { axis: 'y' | 'x' }) {
+  const { wide } = useBreakpoint();
   const structures = useStructures();
   const own = axis === 'y' ? { variable: choice.y, structure: choice.yStructure } : { variable: choice.x, structure: choice.xStructure };
   const other = axis === 'y' ? { variable: choice.x, structure: choice.xStructure } : { variable: choice.y, structure: choice.yStructure };
@@ -47,7 +50,7 @@ function OneAxis({ axis, choice, change }: AxisChoiceProps & { axis: 'y' | 'x' }
   const isSame = (variable: Variable, structure: string | null) => variable === other.variable && structure === other.structure;
 
   return (
-    <Stack gap={8}>
+    <Stack gap={8} style={wide ? undefined : { flex: 1, minWidth: 0 }}>
       <Select
         label={label}
         tone={axisOf(own.variable, own.structure).tone}

@@ -25,7 +25,7 @@ export function CladeChoice({ available, chosen, marks, change, twoColumns }: Cl
   const standing = available.filter((clade) => clade.standing || chosen.includes(clade.slug));
   const others = available.filter((clade) => !standing.includes(clade)).sort((a, b) => b.species - a.species || (a.name < b.name ? -1 : 1));
   const box = ({ slug, name, species }: ScalingAnswer['available'][number]) => (
-    <View key={slug} style={twoColumns ? { width: '50%', paddingRight: 8 } : undefined}>
+    <View key={slug} style={twoColumns ? { width: '50%', paddingRight: 20 } : undefined}>
       <Checkbox label={name} checked={chosen.includes(slug)} mark={<CladeMark clade={slug} spec={marks.get(slug)} />} end={String(species)} onChange={() => toggle(slug)} />
     </View>
   );

@@ -47,18 +47,15 @@ export function ScalingView({ answer, results, marks, choice, change, choices, b
   const caption = <FigureCaptionLines answer={answer} results={results} x={x} y={y} />;
   const exponents = <ExponentsTable results={results} marks={marks} level={level} />;
   const panels = <Panels results={results} marks={marks} x={x} y={y} level={level} choice={choice} change={change} hideSelected={!wide} />;
-  const rest = (
-    <>
-      <LinesInFull results={results} marks={marks} x={x} />
-      {answer.remarks.length > 0 ? (
-        <Section title="Remarks">
-          <View style={{ paddingTop: 10 }}>
-            <Remarks answer={answer} />
-          </View>
-        </Section>
-      ) : null}
-    </>
-  );
+  const lines = <LinesInFull results={results} marks={marks} x={x} />;
+  const remarks =
+    answer.remarks.length > 0 ? (
+      <Section title="Remarks">
+        <View style={{ paddingTop: 10 }}>
+          <Remarks answer={answer} />
+        </View>
+      </Section>
+    ) : null;
   const points = drawn ? <PointsTable results={results} marks={marks} x={x} y={y} selected={choice.species} /> : null;
   const status = <VisuallyHidden live>{busy ? 'The fit is on its way.' : ''}</VisuallyHidden>;
   const dim = { opacity: busy ? 0.55 : 1 };
@@ -77,7 +74,8 @@ export function ScalingView({ answer, results, marks, choice, change, choices, b
             <Sentences answer={answer} marks={marks} />
             {caption}
             {panels}
-            {rest}
+            {lines}
+            {remarks}
             {points}
           </>
         ) : (
@@ -91,7 +89,8 @@ export function ScalingView({ answer, results, marks, choice, change, choices, b
       {exponents}
       <Sentences answer={answer} marks={marks} />
       {panels}
-      {rest}
+      {sideBySide ? null : lines}
+      {remarks}
     </>
   );
   return (
@@ -102,6 +101,7 @@ export function ScalingView({ answer, results, marks, choice, change, choices, b
         <View style={[{ flex: 500, minWidth: 0, gap: 12 }, dim]}>
           {figure}
           {drawn ? caption : null}
+          {sideBySide && drawn ? <View style={{ paddingTop: 20 }}>{lines}</View> : null}
         </View>
         {sideBySide && drawn ? <View style={[{ flex: 472, minWidth: 0, gap: 20, paddingLeft: 16 }, dim]}>{numbers}</View> : null}
       </View>

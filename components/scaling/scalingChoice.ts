@@ -106,5 +106,6 @@ export function queryOf(choice: ScalingChoice): ScalingQuery {
 export function addressOf(choice: ScalingChoice, version: string): string {
   const parameters = new URLSearchParams();
   for (const [name, value] of Object.entries(writeChoice({ ...choice, version: choice.working ? null : version }))) if (value !== undefined) parameters.set(name, value);
-  return `/scaling?${parameters.toString()}`;
+  // A comma may stand as it is, and reads better in a citation.
+  return `/scaling?${parameters.toString().replaceAll('%2C', ',')}`;
 }

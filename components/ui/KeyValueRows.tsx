@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import { View } from 'react-native';
 import { useTheme } from '../theme/ThemeProvider';
 import { row, type Tone } from '../theme/tokens';
 import { useBreakpoint } from '../layout/useBreakpoint';
@@ -36,9 +37,11 @@ export function KeyValueRows({ rows, strongLabels }: { rows: readonly KeyValue[]
           <Element as="dd" css={{ margin: 0, marginLeft: 'auto', textAlign: 'right', maxWidth: '100%' }}>
             <CellContent>{value}</CellContent>
             {note ? (
-              <Text size="secondary" tone="inkSoft" align="right">
-                {note}
-              </Text>
+              <View>
+                <Text size="secondary" tone="inkSoft" align="right">
+                  {note}
+                </Text>
+              </View>
             ) : null}
           </Element>
         </Element>

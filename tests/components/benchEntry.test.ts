@@ -37,6 +37,13 @@ describe('the sample calculator', () => {
     expect(readBench(counted(['412'], { dilution: '0.2' })).problems['dilution']).toMatch(/1 or more/);
   });
 
+  it('gives no number while an entry cannot be read, rather than one without it', () => {
+    expect(readBench(counted(['412'], { dilution: '1:5' })).estimate).toBeNull();
+    expect(readBench(counted(['412'], { dilution: '' })).estimate).toBeNull();
+    expect(readBench(counted(['412', '4l0'])).estimate).toBeNull();
+    expect(readBench(counted(['412'])).estimate?.nucleiCounted).toBe(412);
+  });
+
   it('puts what is impossible at the row that was typed, past rows left empty', () => {
     const { problems } = readBench(counted(['', '41.5']));
     expect(Object.keys(problems)).toEqual(['aliquots.1.nuclei']);
