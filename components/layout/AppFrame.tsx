@@ -1,4 +1,4 @@
-import { Slot, usePathname } from 'expo-router';
+import { Navigator, Slot, usePathname } from 'expo-router';
 import { View } from 'react-native';
 import { useAccount } from '../queries/account';
 import { useTheme } from '../theme/ThemeProvider';
@@ -23,9 +23,12 @@ export function AppFrame() {
       <SkipLink targetId={MAIN_ID} />
       {wide ? <Rail places={places} current={current} height={height} /> : null}
       <View style={{ flex: 1, minWidth: 0, minHeight: 0 }}>
-        <PageBoundary path={path}>
-          <Slot />
-        </PageBoundary>
+        {/* The boundary lies inside the navigator: a page that failed must not take the history with it. */}
+        <Navigator>
+          <PageBoundary path={path}>
+            <Slot />
+          </PageBoundary>
+        </Navigator>
       </View>
       {wide ? null : <Bar places={places} current={current} width={width} />}
     </View>

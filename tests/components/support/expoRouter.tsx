@@ -24,3 +24,7 @@ export function usePathname(): string {
 export function Slot() {
   return null;
 }
+
+export function Navigator({ children }: { children: ReactNode }) {
+  return children;
+}
