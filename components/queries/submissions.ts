@@ -1,7 +1,7 @@
 import { keepPreviousData, useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { pageOf } from '../../shared/contracts/common';
 import type { SubmissionContent } from '../../shared/contracts/content';
-import { attachmentSchema, commentSchema, previewSchema, submissionDetailSchema, submissionItemSchema, type SubmissionDetail } from '../../shared/contracts/submissions';
+import { attachmentSchema, previewSchema, submissionDetailSchema, submissionItemSchema, type SubmissionDetail } from '../../shared/contracts/submissions';
 import type { RevisionStatus } from '../../shared/contracts/vocabulary';
 import { z } from 'zod';
 import { api, queryString } from '../api/client';
@@ -89,7 +89,7 @@ export function useRevise(id: string) {
 export function useComment(id: string) {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: (body: { revision: number; fieldPath: string; text: string }) => api.send('POST', path(id, '/comments'), body, commentSchema),
+    mutationFn: (body: { revision: number; fieldPath: string; text: string }) => api.send('POST', path(id, '/comments'), body, submissionDetailSchema),
     onSuccess: () => Promise.all([client.invalidateQueries({ queryKey: keys.submissions.one(id) }), client.invalidateQueries({ queryKey: keys.review.one(id) })]),
   });
 }
