@@ -66,7 +66,7 @@ export async function proposeTaxon(context: Context, actor: Actor, input: z.outp
     await insertAudit(tx, { actorId: actor.id, action: accepted ? 'taxon-added' : 'taxon-proposed', targetType: 'taxon', targetId: taxonId, detail: { name, parent: parent.name } });
     if (accepted) return { id: taxonId, mails: [] };
     const userIds = await findHoldersOf(tx, 'curator');
-    return { id: taxonId, mails: await tell(context, tx, { userIds, kind: 'taxon-proposed', subject: `${name} is proposed as a taxon`, body: `${actor.name} proposes ${name} (${rank}) below ${parent.name}.`, href: '/taxa', event: `taxon-proposed:${taxonId}` }) };
+    return { id: taxonId, mails: await tell(context, tx, { userIds, kind: 'taxon-proposed', subject: `${name} is proposed as a taxon`, body: `${actor.name} proposes ${name} (${rank}) below ${parent.name}.`, href: '/curate/taxa', event: `taxon-proposed:${taxonId}` }) };
   });
   await enqueueMails(context, mails);
   return readTaxon(context, actor, id);
@@ -86,7 +86,7 @@ export async function decideOnTaxon(context: Context, actor: Actor, taxonId: str
     await decideTaxon(tx, taxonId, refused ? 'refused' : 'accepted', actor.id, context.clock());
     await insertAudit(tx, { actorId: actor.id, action: refused ? 'taxon-refused' : 'taxon-accepted', targetType: 'taxon', targetId: taxonId, detail: { name: taxon.name, reason: input.reason } });
     const body = refused ? `${actor.name} refused ${taxon.name}: ${input.reason}` : `${taxon.name} stands in the classification now and can be used in submissions.`;
-    return tell(context, tx, { userIds: taxon.proposedBy === null ? [] : [taxon.proposedBy], kind: 'taxon-decided', subject: `${taxon.name} was ${refused ? 'refused' : 'accepted'}`, body, href: refused ? '/taxa' : `/species/${taxon.slug}`, event: `taxon-decided:${taxonId}` });
+    return tell(context, tx, { userIds: taxon.proposedBy === null ? [] : [taxon.proposedBy], kind: 'taxon-decided', subject: `${taxon.name} was ${refused ? 'refused' : 'accepted'}`, body, href: refused ? '/submissions' : `/species/${taxon.slug}`, event: `taxon-decided:${taxonId}` });
   });
   await enqueueMails(context, mails);
   return readTaxon(context, actor, taxonId);

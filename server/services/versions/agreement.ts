@@ -17,7 +17,7 @@ export async function askForAgreement(context: Context, versionId: string, actor
   const mailIds = await context.db.transaction(async (tx) => {
     const holders = [...(await findHoldersOf(tx, 'curator')), ...(await findHoldersOf(tx, 'administrator'))];
     const userIds = [...new Set(holders)].filter((id) => id !== actor.id);
-    return tell(context, tx, { userIds, kind: 'freeze-agreement', subject: `version ${label} waits for a second agreement`, body: `${actor.name} has begun to freeze version ${label}. It is frozen once a second curator or the administrator agrees.`, href: '/freeze', event: `freeze-agreement:${versionId}` });
+    return tell(context, tx, { userIds, kind: 'freeze-agreement', subject: `version ${label} waits for a second agreement`, body: `${actor.name} has begun to freeze version ${label}. It is frozen once a second curator or the administrator agrees.`, href: '/curate/freeze', event: `freeze-agreement:${versionId}` });
   });
   await enqueueMails(context, mailIds);
 }
