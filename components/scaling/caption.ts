@@ -26,7 +26,8 @@ export function figureCaption(answer: ScalingAnswer, results: readonly CladeResu
   return {
     title: questionTitle(answer.question),
     lines: [
-      `${countsLine(results, options.hasDiagonals)} Exponents by ${methodWords[answer.question.method] ?? answer.question.method} on log–log axes with their ${percent} intervals: ${exponents.join('; ')}.${bands.length > 0 ? ` Shaded: ${bands.join(' and ')}, ${percent}.` : ''}`,
+      countsLine(results, options.hasDiagonals),
+      `Exponents by ${methodWords[answer.question.method] ?? answer.question.method} on log–log axes with their ${percent} intervals: ${exponents.join('; ')}.${bands.length > 0 ? ` Shaded: ${bands.join(' and ')}, ${percent}.` : ''}`,
       ...(aside.length > 0 ? [`Left out of the fit: ${aside.join(', ')}.`] : []),
       ...(answer.demonstration ? ['Holds demonstration data.'] : []),
       choice.working ? 'Working set, not frozen: not to be cited.' : (options.citation ?? `Allokarya, version ${answer.version}.`),
