@@ -2,7 +2,7 @@ import { View } from 'react-native';
 import type { CheckResult } from '../../../shared/contracts/checks';
 import type { SubmissionContent } from '../../../shared/contracts/content';
 import type { Preview } from '../../../shared/contracts/submissions';
-import { explanationKey } from '../../../shared/domain/checks/outcome';
+import { explanationKey, unexplainedWarnings } from '../../../shared/domain/checks/outcome';
 import { fieldName } from '../../../shared/domain/fieldNames';
 import { useBreakpoint } from '../../layout/useBreakpoint';
 import { CheckList } from '../../marks/CheckList';
@@ -28,16 +28,22 @@ interface CheckStepProps {
 
 /** Everything found, by level, each with its way to the field; a word is asked on what is doubtful. */
 export function CheckStep({ content, preview, pending, failed, onExplain, onReach }: CheckStepProps) {
-  const { checks, refused } = useDraftContext();
+  const { checks, refused, tried } = useDraftContext();
   const { sideBySide } = useBreakpoint();
   const blocks = checks.filter((check) => check.level === 'blocks');
   const warns = checks.filter((check) => check.level === 'warns');
   const passes = checks.filter((check) => check.level === 'passes');
   const known = new Set(checks.map((check) => check.path));
   const others = refused.filter((found) => !known.has(found.path));
+  const open = blocks.length + others.length + unexplainedWarnings(checks, content.explanations).length;
   return (
     <View style={{ flexDirection: sideBySide ? 'row' : 'column', gap: sideBySide ? 40 : 24 }}>
       <View style={{ flex: sideBySide ? 1.4 : undefined, minWidth: 0, gap: 24 }}>
+        {tried && open > 0 ? (
+          <Text role="alert" weight="semibold" tone="flagged">
+            {`Not submitted yet: ${open === 1 ? 'one thing is' : `${open} things are`} still open below.`}
+          </Text>
+        ) : null}
         <Section title={blocks.length === 0 ? 'Nothing is missing or impossible' : `Missing or impossible, ${blocks.length}`} id="field-blocks">
           {blocks.map((check) => (
             <Finding key={`${check.code}@${check.path}`} check={check} content={content} onReach={onReach} />

@@ -54,8 +54,6 @@ export function DraftScreen({ detail }: { detail: SubmissionDetail }) {
     setTried(true);
     submit.reset();
     if (hasBlocks(live.checks) || unexplainedWarnings(live.checks, content.explanations).length > 0) {
-      const first = live.checks.find((check) => check.level === 'blocks') ?? unexplainedWarnings(live.checks, content.explanations)[0];
-      show({ tone: 'flagged', title: 'Not submitted yet.', text: first ? `${first.message} The list says what else is open.` : undefined });
       setTimeout(() => reachField('blocks'), 60);
       return;
     }
@@ -86,15 +84,17 @@ export function DraftScreen({ detail }: { detail: SubmissionDetail }) {
         topEnd={<SaveSign state={state} />}
         demonstration={detail.demonstration}
         foot={
-          <View style={{ flex: 1, flexDirection: 'row', gap: 10, justifyContent: 'flex-end' }}>
-            <Button label="Keep draft" onPress={() => void saver.flush().then(() => router.push('/submissions' as Href))} grow={!wide} />
-            {next ? <Button kind="primary" label={`Next: ${next.label.toLowerCase()}`} onPress={() => place.go({ step: next.key })} grow={!wide} /> : null}
-            {next ? null : <Button kind="primary" label="Submit for review" working={submitting} workingLabel="Submitting" disabled={!detail.may.submit} onPress={() => void send()} grow={!wide} />}
+          <View style={{ flex: 1, minWidth: 0, gap: 10 }}>
+            <SaveTrouble state={state} saver={saver} />
+            <View style={{ flexDirection: 'row', gap: 10, justifyContent: 'flex-end' }}>
+              <Button label="Keep draft" onPress={() => void saver.flush().then(() => router.push('/submissions' as Href))} grow={!wide} />
+              {next ? <Button kind="primary" label={`Next: ${next.label.toLowerCase()}`} onPress={() => place.go({ step: next.key })} grow={!wide} /> : null}
+              {next ? null : <Button kind="primary" label="Submit for review" working={submitting} workingLabel="Submitting" disabled={!detail.may.submit} onPress={() => void send()} grow={!wide} />}
+            </View>
           </View>
         }
       >
         <StepsNav steps={steps} current={place.step.key} checks={live.checks} onGo={(step) => place.go({ step })} />
-        <SaveTrouble state={state} saver={saver} />
         {submit.error ? <Notice tone="flagged" {...errorInWords(submit.error)} /> : null}
         <Asked detail={detail} />
         <View key={place.step.key} role="region" aria-label={place.step.label} style={{ gap: 16 }}>

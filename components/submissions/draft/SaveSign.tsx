@@ -2,6 +2,7 @@ import { View } from 'react-native';
 import { StateSign } from '../../marks/StateSign';
 import { Button } from '../../ui/Button';
 import { Notice } from '../../ui/Notice';
+import { Text } from '../../ui/Text';
 import type { DraftSaver, SaveState } from './DraftSaver';
 
 const clock = (iso: string): string => {
@@ -23,7 +24,14 @@ export function SaveSign({ state }: { state: SaveState }) {
 /** What stands in the way of keeping the draft at the register, and the choice where two states exist. */
 export function SaveTrouble({ state, saver }: { state: SaveState; saver: DraftSaver }) {
   if (state.kind === 'here' && state.offline) {
-    return <Notice tone="waiting" title="Kept here, not yet sent" text="The register does not answer. Go on; what you type is kept on this device and sent when it returns." action={{ label: 'Send now', onPress: saver.retry }} />;
+    return (
+      <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', columnGap: 10 }}>
+        <Text size="secondary" style={{ flexShrink: 1 }}>
+          The register does not answer. Go on; what you type is kept on this device and sent when it returns.
+        </Text>
+        <Button kind="quiet" label="Send now" onPress={saver.retry} style={{ marginVertical: -6 }} />
+      </View>
+    );
   }
   if (state.kind === 'refused') {
     return <Notice tone="flagged" title={state.title} text={`${state.text} What you typed is kept on this device.`} action={{ label: 'Send again', onPress: saver.retry }} />;
@@ -31,10 +39,10 @@ export function SaveTrouble({ state, saver }: { state: SaveState; saver: DraftSa
   if (state.kind !== 'stale') return null;
   return (
     <View style={{ gap: 8 }} role="alert">
-      <Notice tone="flagged" title="This draft was changed elsewhere" text="Both states are kept: yours here, the newer one at the register. Choose which goes on; nothing is mixed." />
+      <Notice tone="flagged" title="This draft was changed elsewhere" text="Both states are kept: yours here, the newer one at the register. Choose which goes on." />
       <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 10 }}>
-        <Button label="Use the newer state" onPress={saver.takeNewer} />
-        <Button label="Keep mine (send it)" onPress={saver.keepMine} />
+        <Button label="Use the newer state" onPress={saver.takeNewer} grow />
+        <Button label="Keep mine (send it)" onPress={saver.keepMine} grow />
       </View>
     </View>
   );

@@ -33,7 +33,7 @@ export function StructureFields({ path, entry, openSample, onOpenSample, onChang
   const choose = (key: string) => set({ structure: key, definitionVersion: structures.data?.find((structure) => structure.key === key)?.definitions.at(-1)?.version ?? 1 });
   return (
     <View id={`field-${path}`} style={{ gap: 18 }}>
-      <FieldGrid least={220}>
+      <FieldGrid least={280}>
         <DraftChoice path={`${path}.structure`} label="Structure" hint={composition || (structures.isError ? 'The list of structures did not arrive; reload the page.' : undefined)} value={entry.structure === '' ? null : entry.structure} options={options} onChange={choose} />
         {chosen && chosen.definitions.length > 1 ? (
           <DraftChoice path={`${path}.definitionVersion`} label="Definition version" value={String(entry.definitionVersion)} options={chosen.definitions.map(({ version, note }) => ({ value: String(version), label: note ? `${version}: ${note}` : String(version) }))} onChange={(version) => set({ definitionVersion: Number(version) })} />

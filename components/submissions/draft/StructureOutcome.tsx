@@ -55,8 +55,8 @@ export function StructureOutcome({ path, entry, derived, pending, onSamples }: S
         <View style={{ paddingTop: 6, gap: 4 }}>
           {place ? (
             <>
-              <PlaceOnLine clade={place.clade} place={{ ratio: place.ratio, lower: place.lowerRatio, upper: place.upperRatio }} flagged={!place.inside} />
-              <Text size="secondary" tone="inkSoft">
+              <PlaceOnLine clade={place.clade} place={{ ratio: place.ratio, lower: place.lowerRatio, upper: place.upperRatio }} dense flagged={!place.inside} />
+              <Text size="secondary">
                 {place.sentence}
               </Text>
             </>

@@ -20,6 +20,9 @@ interface StructuresStepProps extends SpecimenPartProps {
   pending: boolean;
 }
 
+/** A position of the web: what follows stays beside the field one is in. */
+const staysInView = { position: 'sticky' as 'relative', top: 0, alignSelf: 'flex-start' } as const;
+
 const nameOf = (entry: StructureEntry, index: number) => entry.structure.replaceAll('_', ' ') || `structure ${index + 1}`;
 
 /** The structures of the specimen, one open at a time; what follows from it stands beside it on wide screens. */
@@ -59,7 +62,7 @@ export function StructuresStep({ content, change, place, preview, pending }: Str
           <View style={{ flex: sideBySide ? 1.7 : undefined, minWidth: 0 }}>
             <StructureFields key={entry.id} path={path} entry={entry} openSample={place.sample} onOpenSample={(sample) => place.go({ sample })} onChange={edit} />
           </View>
-          <View style={{ flex: sideBySide ? 1 : undefined, minWidth: 0 }}>
+          <View style={[{ flex: sideBySide ? 1 : undefined, minWidth: 0 }, sideBySide ? staysInView : null]}>
             <StructureOutcome path={path} entry={entry} derived={preview?.structures.find((derived) => derived.entryId === entry.id)} pending={pending} onSamples={(make) => edit((now) => ({ ...now, samples: make(now.samples) }))} />
           </View>
         </View>
