@@ -10,7 +10,7 @@ import { Section } from '../ui/Section';
 import { Text } from '../ui/Text';
 
 interface ThreadsProps {
-  detail: Pick<SubmissionDetail, 'id' | 'revision' | 'content' | 'comments' | 'changes' | 'may'>;
+  detail: Pick<SubmissionDetail, 'id' | 'revision' | 'status' | 'content' | 'comments' | 'changes' | 'may'>;
 }
 
 function groupByField(comments: readonly CommentView[]): [string, CommentView[]][] {
@@ -37,6 +37,8 @@ function FieldThread({ detail, path, comments, change }: ThreadsProps & { path: 
   const [text, setText] = useState('');
   const send = useComment(detail.id);
   const name = fieldName(path, detail.content);
+  // A draft takes no comments: until it is submitted, an answer stands at the revision that was asked about.
+  const revision = detail.status === 'draft' ? (comments.at(-1)?.revision ?? detail.revision) : detail.revision;
   return (
     <Thread
       field={name}
@@ -48,7 +50,7 @@ function FieldThread({ detail, path, comments, change }: ThreadsProps & { path: 
           ? {
               value: text,
               onChange: setText,
-              onSend: () => (text.trim() === '' ? undefined : send.mutate({ revision: detail.revision, fieldPath: path, text }, { onSuccess: () => setText('') })),
+              onSend: () => (text.trim() === '' ? undefined : send.mutate({ revision, fieldPath: path, text }, { onSuccess: () => setText('') })),
               working: send.isPending,
               label: `Answer at ${name}`,
               error: send.error ? errorInWords(send.error).text : undefined,

@@ -85,9 +85,11 @@ test('the contributor reads what is asked, answers the comment and submits revis
   await page.getByRole('button', { name: 'Write revision 2' }).click();
   await expect(page.getByText('Rafael Lindqvist asks for changes in revision 1')).toBeVisible();
   await page.getByRole('button', { name: /^Comments at fields, 1/ }).click();
-  await page.getByLabel(`Answer at ${cerebellum.words}, sample 1`).fill('It was; it is entered now.');
+  const answer = page.getByLabel(`Answer at ${cerebellum.words}, sample 1`);
+  await answer.fill('It was; it is entered now.');
   await page.getByRole('button', { name: 'Send', exact: true }).click();
-  await expect(page.getByText('It was; it is entered now.').first()).toBeVisible();
+  await expect(answer).toHaveValue('');
+  await expect(page.getByRole('group', { name: `Thread at ${cerebellum.words}, sample 1` })).toContainText('It was; it is entered now.');
   await openStep(page, 'Structures');
   await page.getByRole('tab', { name: cerebellum.words }).click();
   await fillAliquot(page, 4, cerebellum.fourth);
