@@ -4,7 +4,6 @@ import { centreKinds, countingMethods, massStates, massUnits, origins, spreadKin
 import { useStructures } from '../../queries/register';
 import type { Tone } from '../../theme/tokens';
 import { Disclosure } from '../../ui/Disclosure';
-import { Heading } from '../../ui/Heading';
 import { useFieldChecks } from './DraftContext';
 import { DraftChoice, DraftNumber, DraftQuantity, DraftText, FieldGrid } from './fields';
 import { SpeciesChoice } from './SpeciesChoice';
@@ -33,7 +32,7 @@ export function ValueFields({ path, value, number, onChange }: ValueFieldsProps)
   return (
     <View id={`field-${path}`} role="group" aria-label={`Row ${number}`} style={{ gap: 16 }}>
       <SpeciesChoice path={path} value={value} onChange={onChange} />
-      <FieldGrid>
+      <FieldGrid least={280}>
         <DraftChoice path={`${path}.structure`} label="Structure" value={value.structure === '' ? null : value.structure} options={options} onChange={choose} />
         <DraftText path={`${path}.place`} label="Place in the source" hint="Table, figure, page." value={value.place} maxLength={200} onChange={(place) => onChange({ place })} />
       </FieldGrid>
@@ -70,11 +69,8 @@ function PrintedNumber({ path, label, tone, isMass, value, onChange }: PrintedNu
   const whole = useFieldChecks(path);
   const lower = label.toLowerCase();
   return (
-    <View id={`field-${path}`} role="group" aria-label={label} style={{ gap: 6 }}>
-      <Heading level={4} look="small" tone={tone}>
-        {label}
-      </Heading>
-      <FieldGrid least={130}>
+    <View id={`field-${path}`} role="group" aria-label={label}>
+      <FieldGrid least={150}>
         {isMass ? (
           <DraftQuantity path={`${path}.text`} label={label} tone={tone} value={value} units={massUnits} hint={whole.error ?? whole.warning} onChange={({ text, unit }) => set({ text, unit })} />
         ) : (
