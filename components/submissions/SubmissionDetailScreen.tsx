@@ -10,7 +10,7 @@ import { RecordTrail } from '../marks/RecordTrail';
 import { StateSign } from '../marks/StateSign';
 import { errorInWords } from '../queries/errorInWords';
 import { useRevise } from '../queries/submissions';
-import { checkRows } from '../review/checkRows';
+import { checkRows } from '../marks/checkRows';
 import { CommentSheet } from '../review/CommentSheet';
 import { Evidence } from '../review/Evidence';
 import { LiteratureReview } from '../review/LiteratureReview';

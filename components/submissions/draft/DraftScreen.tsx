@@ -122,6 +122,8 @@ export function DraftScreen({ detail }: { detail: SubmissionDetail }) {
 function Asked({ detail }: { detail: SubmissionDetail }) {
   const last = detail.decisions.at(-1);
   const asked = last?.decision === 'request-changes' ? last : null;
+  // A draft takes no comments itself: an answer stands at the revision that was submitted last.
+  const submitted = detail.revisions.findLast((one) => one.submittedAt !== null)?.revision ?? detail.revision;
   if (asked === null && detail.comments.length === 0 && detail.recheck === null) return null;
   return (
     <View style={{ gap: 8 }}>
@@ -129,7 +131,7 @@ function Asked({ detail }: { detail: SubmissionDetail }) {
       {detail.recheck && detail.recheck.status !== 'closed' ? <Notice tone="waiting" sign="clock" title="Re-check" text={detail.recheck.question} action={{ label: 'Open the re-check', href: `/rechecks/${detail.recheck.id}` as Href }} /> : null}
       {detail.comments.length > 0 ? (
         <Disclosure label={`Comments at fields, ${detail.comments.length}`}>
-          <Threads detail={detail} />
+          <Threads detail={{ ...detail, revision: submitted, changes: [] }} />
         </Disclosure>
       ) : null}
     </View>

@@ -3,6 +3,7 @@ import { View } from 'react-native';
 import type { SampleEntry, StructureEntry } from '../../../shared/contracts/content';
 import type { DerivedStructure } from '../../../shared/contracts/submissions';
 import { readStructure } from '../../../shared/domain/specimenReading';
+import { checkName } from '../../marks/checkRows';
 import { PlaceOnLine } from '../../marks/PlaceOnLine';
 import { derivedRows } from '../../review/StructureReview';
 import { useTheme } from '../../theme/ThemeProvider';
@@ -42,7 +43,7 @@ export function StructureOutcome({ path, entry, derived, pending, onSamples }: S
         ) : null}
       </Section>
       {doubts.map((check) => (
-        <Doubt key={`${check.code}@${check.path}`} name={check.code.replaceAll('-', ' ')} figure={check.figure} text={check.message} impossible={check.level === 'blocks'}>
+        <Doubt key={`${check.code}@${check.path}`} name={checkName(check.code)} figure={check.figure} text={check.message} impossible={check.level === 'blocks'}>
           {check.code === 'side-not-doubled' ? (
             <>
               <Button label="Double it" onPress={() => onSamples((samples) => samples.map((sample) => (sample.scaleUp.kind === 'none' && sample.side !== 'midline' && sample.side !== 'both' ? { ...sample, scaleUp: doubledScaleUp } : sample)))} grow />
