@@ -41,20 +41,20 @@ export function AnswerForm({ recheck }: { recheck: Recheck }) {
     if (draft) go();
     else revise.mutate({ recheckId: recheck.id }, { onSuccess: go });
   };
-  const send = () => {
+  const send = async () => {
     setTried(true);
     if (kind === null || text.trim() === '') return;
-    answer.mutate(
-      { answer: kind, text: text.trim(), attachmentId: kind === 'confirmed' && attachmentId !== '' ? attachmentId : null },
-      {
-        onSuccess: () => {
-          forget();
-          setAsking(false);
-          show({ tone: 'settled', title: `The re-check of ${recheck.record} is answered.`, text: 'A reviewer of another laboratory closes it.' });
-        },
-        onError: () => setAsking(false),
-      },
-    );
+    try {
+      // Awaited, since the new state takes this form away, and with it what mutate would call back.
+      await answer.mutateAsync({ answer: kind, text: text.trim(), attachmentId: kind === 'confirmed' && attachmentId !== '' ? attachmentId : null });
+    } catch {
+      // What failed stands below the form.
+      return;
+    } finally {
+      setAsking(false);
+    }
+    forget();
+    show({ tone: 'settled', title: `The re-check of ${recheck.record} is answered.`, text: 'A reviewer of another laboratory closes it.' });
   };
   const failure = answer.error ?? revise.error;
   const missing = tried && text.trim() === '' ? 'Say what was found.' : undefined;
@@ -73,7 +73,7 @@ export function AnswerForm({ recheck }: { recheck: Recheck }) {
           <>
             <TextField label="Your answer" value={text} onChangeText={setText} rows={4} maxLength={4000} error={missing} />
             {kind === 'confirmed' && files.length > 0 ? <Select label="Evidence" value={attachmentId} options={files} placeholder="No file" onChange={setAttachmentId} hint="A file of the submission." /> : null}
-            <Button kind={kind === 'withdrawn' ? 'danger' : 'primary'} label="Send the answer" working={answer.isPending} onPress={() => (kind === 'withdrawn' && text.trim() !== '' ? setAsking(true) : send())} style={{ alignSelf: 'flex-start' }} />
+            <Button kind={kind === 'withdrawn' ? 'danger' : 'primary'} label="Send the answer" working={answer.isPending} onPress={() => (kind === 'withdrawn' && text.trim() !== '' ? setAsking(true) : void send())} style={{ alignSelf: 'flex-start' }} />
           </>
         )}
         {failure ? (
@@ -89,7 +89,7 @@ export function AnswerForm({ recheck }: { recheck: Recheck }) {
         confirmLabel={`Withdraw ${recheck.record}`}
         cancelLabel="Keep it"
         working={answer.isPending}
-        onConfirm={send}
+        onConfirm={() => void send()}
         onCancel={() => setAsking(false)}
       />
     </Section>

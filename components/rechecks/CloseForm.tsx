@@ -16,18 +16,18 @@ export function CloseForm({ recheck }: { recheck: Recheck }) {
   const [tried, setTried] = useState(false);
   const close = useCloseRecheck(recheck.id);
   const { show } = useNotices();
-  const send = (outcome: 'close' | 'reopen') => {
+  const send = async (outcome: 'close' | 'reopen') => {
     setTried(true);
     if (text.trim() === '') return;
-    close.mutate(
-      { outcome, text: text.trim() },
-      {
-        onSuccess: () => {
-          forget();
-          show({ tone: 'settled', title: `The re-check of ${recheck.record} is ${outcome === 'close' ? 'closed' : 'open again'}.`, text: 'Its laboratory was told.' });
-        },
-      },
-    );
+    try {
+      // Awaited, since the new state takes this form away, and with it what mutate would call back.
+      await close.mutateAsync({ outcome, text: text.trim() });
+    } catch {
+      // What failed stands at the field.
+      return;
+    }
+    forget();
+    show({ tone: 'settled', title: `The re-check of ${recheck.record} is ${outcome === 'close' ? 'closed' : 'open again'}.`, text: 'Its laboratory was told.' });
   };
   const working = (outcome: 'close' | 'reopen') => close.isPending && close.variables.outcome === outcome;
   const error = close.error ? errorInWords(close.error).text : tried && text.trim() === '' ? 'Give the reason in a sentence.' : undefined;
@@ -36,8 +36,8 @@ export function CloseForm({ recheck }: { recheck: Recheck }) {
       <View style={{ maxWidth: 640, gap: 12, paddingTop: 8 }}>
         <TextField label="Reason" value={text} onChangeText={setText} rows={3} maxLength={4000} error={error} />
         <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: 10 }}>
-          <Button kind="primary" label="Close the re-check" working={working('close')} onPress={() => send('close')} />
-          <Button label="Open it again" working={working('reopen')} onPress={() => send('reopen')} />
+          <Button kind="primary" label="Close the re-check" working={working('close')} onPress={() => void send('close')} />
+          <Button label="Open it again" working={working('reopen')} onPress={() => void send('reopen')} />
         </View>
         <Text size="secondary" tone="inkSoft">
           Closing changes no number; the question and the answer stay on the record’s trail.

@@ -22,15 +22,18 @@ export function WithdrawAct({ detail }: { detail: SubmissionDetail }) {
   const [tried, setTried] = useState(false);
   const withdraw = useWithdraw(detail.id);
   const { show } = useNotices();
-  const confirm = () => {
+  const confirm = async () => {
     setTried(true);
     if (reason.trim() === '') return;
-    withdraw.mutate(reason.trim(), {
-      onSuccess: () => {
-        setAsking(false);
-        show({ tone: 'settled', title: `Revision ${detail.revision} of ${detail.title} is withdrawn.` });
-      },
-    });
+    try {
+      // Awaited, since the withdrawn state takes this act away, and with it what mutate would call back.
+      await withdraw.mutateAsync(reason.trim());
+    } catch {
+      // What failed stands at the field.
+      return;
+    }
+    setAsking(false);
+    show({ tone: 'settled', title: `Revision ${detail.revision} of ${detail.title} is withdrawn.` });
   };
   const error = withdraw.error ? errorInWords(withdraw.error).text : tried && reason.trim() === '' ? 'Give the reason in a sentence.' : undefined;
   return (
@@ -43,7 +46,7 @@ export function WithdrawAct({ detail }: { detail: SubmissionDetail }) {
         confirmLabel={`Withdraw revision ${detail.revision}`}
         cancelLabel="Keep it"
         working={withdraw.isPending}
-        onConfirm={confirm}
+        onConfirm={() => void confirm()}
         onCancel={() => setAsking(false)}
       >
         <TextField label="Reason" value={reason} onChangeText={setReason} rows={2} maxLength={2000} error={error} />
