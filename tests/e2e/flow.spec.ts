@@ -8,9 +8,10 @@ import { estimate, printedCount, specimen } from './support/flowSpecimen';
  * From sign-in to the citation of version 2, every act through the screen. Each test is the turn of one
  * person and begins where the one before ended.
  */
-test.describe.configure({ mode: 'serial' });
+test.describe.configure({ mode: 'serial', timeout: 240_000 });
 
 const { cortex, cerebellum } = specimen;
+const aside = { species: 'Commenticervus planus', reason: 'White matter was left on one side only.' };
 const title = `${specimen.species}, ${specimen.code}`;
 const cortexSum = estimate({ ...cortex, nuclei: cortex.nuclei.slice(0, cortex.spoilt - 1) }, 2);
 
@@ -56,8 +57,7 @@ test('a contributor enters a specimen, loses nothing on reload, explains what is
   await expect(page.getByRole('heading', { name: 'Place on the line of Primates' })).toBeVisible();
   await expect(page.getByRole('group', { name: /^few aliquots at cerebellum/ })).toBeVisible();
   await page.getByRole('button', { name: 'Submit for review' }).click();
-  await expect(page.getByText('Not submitted yet.')).toBeVisible();
-  await page.getByRole('button', { name: 'Close notice: Not submitted yet.' }).click();
+  await expect(page.getByRole('alert')).toContainText('Not submitted yet');
   expect(await explainDoubtful(page, 'The suspension was used up after three loads.')).toBeGreaterThan(0);
   await page.getByRole('button', { name: 'Submit for review' }).click();
   await expect(page.getByText('It waits for a reviewer of another laboratory.')).toBeVisible();
@@ -142,6 +142,22 @@ test('the reviewer closes the re-check', async ({ page }) => {
   await page.getByLabel('Reason', { exact: true }).fill('The evidence answers it.');
   await page.getByRole('button', { name: 'Close the re-check' }).click();
   await expect(page.getByText(/^The re-check of AK-\d{6} is closed\.$/)).toBeVisible();
+  await page.getByRole('link', { name: /^AK-\d{6}$/ }).click();
+  await expect(page.getByText('re-check closed').first()).toBeVisible();
+  await expect(page.getByRole('listitem').filter({ hasText: 'The evidence answers it.' })).toBeVisible();
+});
+
+test('the curator sets a record aside from one pair of variables, with the reason', async ({ page }) => {
+  await signInAs(page, 'curator');
+  await openPlace(page, 'Curate');
+  await openRow(page, 'Approved records in no version yet', aside.species, cortex.words);
+  await page.getByRole('button', { name: 'Set aside' }).click();
+  const sheet = page.getByRole('dialog');
+  await sheet.getByRole('radio', { name: 'mass and neurons of the cerebral cortex, either one on x' }).click();
+  await sheet.getByLabel('Reason, for everyone to read').fill(aside.reason);
+  await sheet.getByRole('button', { name: 'Set aside' }).click();
+  await page.getByRole('dialog').getByRole('button', { name: 'Set aside' }).last().click();
+  await expect(page.getByText(/^AK-\d{6} is set aside\.$/)).toBeVisible();
 });
 
 test('the curator looks at the next version and freezes it', async ({ page }) => {
@@ -171,6 +187,7 @@ test('anyone opens version 2, verifies it, finds the species on the line, reads 
   await expect(page.getByRole('group', { name: /^Version 2, frozen \d{4}-\d\d-\d\d/ })).toBeVisible();
   await expect(page.getByText('This version holds demonstration data: invented animals and counts.')).toBeVisible();
   await expect(page.getByRole('table', { name: 'Files of version 2' }).getByRole('link', { name: 'records.csv' })).toBeVisible();
+  await expect(page.getByText(aside.reason).first()).toBeVisible();
   await page.getByRole('button', { name: 'Verify here' }).click();
   await expect(page.getByText(/^all \d+ files were read again: size and SHA-256 agree$/)).toBeVisible();
   await expect(page.getByText(/version 2\. DOI not minted\. Frozen/)).toBeVisible();
@@ -185,7 +202,7 @@ test('anyone opens version 2, verifies it, finds the species on the line, reads 
   await expect(page.getByText('in version 2', { exact: true })).toBeVisible();
   const shown = printedCount(await valueOf(page, 'neurons').innerText());
   expect(Math.abs(shown / cortexSum.neurons - 1)).toBeLessThan(0.02);
-  for (const happening of ['submitted', 'approved', 're-check']) await expect(page.getByRole('listitem').filter({ hasText: happening }).first()).toBeVisible();
+  for (const happening of ['revision 2 submitted', 'revision 2 approved', 'frozen in version 2']) await expect(page.getByRole('listitem').filter({ hasText: happening })).toBeVisible();
   await page.getByRole('button', { name: /^Cite record AK-/ }).click();
   await expect(page.getByRole('dialog').getByText(/version 2\. DOI not minted/)).toBeVisible();
 });

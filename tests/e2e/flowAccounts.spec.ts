@@ -2,7 +2,7 @@ import { expect, test, type Page } from '@playwright/test';
 import { fillSignIn, isPhone, openPlace, signInAs, signOut } from './support/flowPeople';
 
 /** An account from sign-up to its first draft, and a forgotten password. Mail is read where the administrator reads it. */
-test.describe.configure({ mode: 'serial' });
+test.describe.configure({ mode: 'serial', timeout: 180_000 });
 
 const name = 'Wren Abara';
 const email = 'wren.abara@demo.example';

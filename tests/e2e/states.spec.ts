@@ -80,9 +80,9 @@ test('a page of work leads a visitor to sign in and back, and tells a wrong role
 test('what may not be known looks as what does not exist', async ({ page }) => {
   await signIn(page, 'reviewer');
   await page.goto('/submissions/00000000-0000-4000-8000-000000000000');
-  await expect(page.getByRole('alert')).toBeVisible();
+  await expect(page.getByRole('alert')).toContainText('There is nothing at this address.');
   await page.goto('/records/AK-999999');
-  await expect(page.getByRole('alert')).toBeVisible();
+  await expect(page.getByRole('alert')).toContainText('There is nothing at this address.');
   await page.goto('/nowhere/at-all');
   await expect(page.getByRole('heading', { level: 1 })).toBeVisible();
   await expect(page.getByRole('main').getByRole('link').first()).toBeVisible();
@@ -140,4 +140,23 @@ test('a draft changed in two windows keeps both states until the person chooses'
   await other.reload();
   await expect(field(other, 'Locality')).toHaveValue('Larkmoor');
   await expect(field(other, 'Voucher')).toHaveValue('from the other window');
+});
+
+test('a draft is withdrawn after one question, with its reason, and stays listed', async ({ page }) => {
+  await signIn(page, 'contributor');
+  await newDraft(page);
+  await field(page, 'Specimen code').fill('QL-GONE-1');
+  await waitUntilKept(page);
+  await page.getByRole('navigation', { name: 'Steps' }).getByRole('link', { name: /^Check and submit/ }).click();
+  await page.getByRole('button', { name: 'Withdraw revision 1' }).click();
+  const dialog = page.getByRole('dialog');
+  await dialog.getByRole('button', { name: 'Withdraw revision 1' }).click();
+  await expect(dialog.getByText('Give the reason in a sentence.')).toBeVisible();
+  await dialog.getByLabel('Reason').fill('Entered twice.');
+  await dialog.getByRole('button', { name: 'Withdraw revision 1' }).click();
+  await expect(page.getByText(/^Revision 1 of .* is withdrawn\.$/)).toBeVisible();
+  await expect(dialog).toBeHidden();
+  await expect(page.getByText('Withdrawn: it stays listed.')).toBeVisible();
+  await page.goto('/submissions?state=withdrawn');
+  await expect(page.getByRole('table').getByRole('row').filter({ hasText: 'QL-GONE-1' })).toBeVisible();
 });
