@@ -16,7 +16,7 @@ export default defineConfig({
   outputDir: 'test-results',
   snapshotPathTemplate: '{testDir}/snapshots/{projectName}/{arg}{ext}',
   timeout: 90_000,
-  expect: { timeout: 10_000 },
+  expect: { timeout: 20_000 },
   forbidOnly: process.env['CI'] !== undefined,
   // A test that passes at the second try has found something.
   retries: 0,
