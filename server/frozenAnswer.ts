@@ -9,6 +9,8 @@ export const entityTag = (content: unknown): string => `"${createHash('sha256').
  * ever; asked for as "the current one" it is kept with its tag and asked for again. Express answers 304 by the tag.
  */
 export function markFrozen(response: Response, tag: string, options: { explicit: boolean }): void {
+  // A client that sends the tag asks whether it still holds, also with `no-cache`, which fetch adds by itself: the tag alone decides.
+  if (response.req.headers['if-none-match'] !== undefined) delete response.req.headers['cache-control'];
   response.setHeader('ETag', tag);
   response.setHeader('Cache-Control', options.explicit ? 'public, max-age=31536000, immutable' : 'public, no-cache');
 }
