@@ -1,7 +1,7 @@
 import { and, asc, eq, inArray, isNull, lte, ne, or, sql } from 'drizzle-orm';
 import type { overlapKinds } from '../../shared/contracts/vocabulary';
 import type { Queryable, Transaction } from '../client';
-import { recordRevisions, records, rechecks, sourceOverlaps, sources, structures, submissions } from '../schema/index';
+import { recordRevisions, records, rechecks, sourceOverlaps, sources, structures, submissions, versionRows, versions } from '../schema/index';
 
 export type StoredRow = (typeof recordRevisions.$inferSelect)['row'];
 
@@ -47,32 +47,43 @@ export async function withdrawRecords(tx: Transaction, recordIds: readonly strin
   await tx.update(records).set({ withdrawnAt: at, withdrawnReason: reason }).where(and(inArray(records.id, [...recordIds]), isNull(records.withdrawnAt)));
 }
 
-/** What the register holds of a species apart from one submission: in force, not withdrawn, not under embargo on the day. */
-export function findRowsOfTaxon(db: Queryable, taxonId: string, exceptSubmissionId: string | null, day: string) {
+/** Which records somebody may be told of: apart from one submission, not under embargo on the day, and outside the working set only published ones or those of the own laboratory. */
+export interface HeldScope {
+  exceptSubmissionId: string | null;
+  day: string;
+  /** `all`: the whole working set; else what a frozen version holds, and the records of this laboratory. */
+  workingOf: 'all' | { labId: string | null };
+}
+
+function isHeld(db: Queryable, { exceptSubmissionId, day, workingOf }: HeldScope) {
+  const published = db.select({ id: versionRows.recordRevisionId }).from(versionRows).innerJoin(versions, and(eq(versions.id, versionRows.versionId), eq(versions.status, 'frozen')));
+  return and(
+    isNull(records.withdrawnAt),
+    or(isNull(recordRevisions.embargoUntil), lte(recordRevisions.embargoUntil, day)),
+    exceptSubmissionId === null ? undefined : ne(records.submissionId, exceptSubmissionId),
+    workingOf === 'all' ? undefined : or(inArray(recordRevisions.id, published), workingOf.labId === null ? undefined : eq(records.labId, workingOf.labId)),
+  );
+}
+
+/** What the register holds of a species, in force. */
+export function findRowsOfTaxon(db: Queryable, taxonId: string, scope: HeldScope) {
   return db
     .select({ row: recordRevisions.row })
     .from(records)
     .innerJoin(recordRevisions, and(eq(recordRevisions.recordId, records.id), eq(recordRevisions.revision, records.currentRevision)))
-    .where(
-      and(
-        eq(records.taxonId, taxonId),
-        isNull(records.withdrawnAt),
-        or(isNull(recordRevisions.embargoUntil), lte(recordRevisions.embargoUntil, day)),
-        exceptSubmissionId === null ? undefined : ne(records.submissionId, exceptSubmissionId),
-      ),
-    )
+    .where(and(eq(records.taxonId, taxonId), isHeld(db, scope)))
     .orderBy(asc(records.number));
 }
 
 /** Criteria by which the register's records of structures are bounded, by structure key. */
-export async function findDelineations(db: Queryable, structureKeys: readonly string[], exceptSubmissionId: string | null): Promise<Record<string, string[]>> {
+export async function findDelineations(db: Queryable, structureKeys: readonly string[], scope: HeldScope): Promise<Record<string, string[]>> {
   if (structureKeys.length === 0) return {};
   const rows = await db
     .selectDistinct({ structure: structures.key, delineation: sql<string[]>`${recordRevisions.row} -> 'delineation'` })
     .from(records)
     .innerJoin(structures, eq(structures.id, records.structureId))
     .innerJoin(recordRevisions, and(eq(recordRevisions.recordId, records.id), eq(recordRevisions.revision, records.currentRevision)))
-    .where(and(inArray(structures.key, [...structureKeys]), isNull(records.withdrawnAt), exceptSubmissionId === null ? undefined : ne(records.submissionId, exceptSubmissionId)));
+    .where(and(inArray(structures.key, [...structureKeys]), isHeld(db, scope)));
   const found: Record<string, string[]> = {};
   for (const { structure, delineation } of rows) found[structure] = [...new Set([...(found[structure] ?? []), ...delineation])];
   return found;

@@ -1,7 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { ScalingAnswer } from '../../shared/contracts/fits';
 import type { RecordPage, Register } from '../../shared/contracts/register';
-import type { SubmissionDetail } from '../../shared/contracts/submissions';
+import type { Preview, SubmissionDetail } from '../../shared/contracts/submissions';
 import type { SpecimenContent } from '../../shared/contracts/content';
 import { findUnfinishedFitRuns } from '../../db/queries/fits';
 import { runFitRefresh } from '../../server/services/dataset/fitRefresh';
@@ -65,6 +65,14 @@ describe('an approved record that no version holds', () => {
       expect(body.samples[0]?.aliquots).toHaveLength(4);
     }
     expect((await contributor.get<RecordPage>(`/records/${number}`)).body.may.revise).not.toBeNull();
+  });
+
+  it('is held against a second specimen of its own laboratory, and not shown to another by such a check', async () => {
+    const content = soundSpecimen('M-9', (sound) => Object.assign(sound.specimen, { nameAsEntered: 'Marmota flaviventris', taxon: 'marmota-flaviventris' }));
+    const stranger = await app.as(await makePerson(app.context.db, { roles: ['contributor'], labId: app.labs.second.id }));
+    const codes = async (client: TestClient) => (await client.post<Preview>('/submissions/preview', { content })).body.checks.map(({ code }) => code);
+    expect(await codes(contributor)).toContain('second-specimen');
+    expect(await codes(stranger)).not.toContain('second-specimen');
   });
 
   it('is flagged in the working set, with the fit and the reason named, and tells the curator of what waits', async () => {

@@ -96,7 +96,7 @@ export async function describeReview(context: Context, actor: Actor, known: Know
   const taxa = taxonSlugsOf(shown.content).flatMap((slug) => evaluated.vocabulary.taxa.get(slug) ?? []);
   const held: ReviewView['held'] = [];
   for (const taxon of taxa) {
-    for (const { row } of await findRowsOfTaxon(db, taxon.id, known.submission.id, today(context))) {
+    for (const { row } of await findRowsOfTaxon(db, taxon.id, { exceptSubmissionId: known.submission.id, day: today(context), workingOf: 'all' })) {
       const { number, structure, structureMassG, neurons, neuronsError, cells } = row;
       held.push({ number, structure, source: row.specimen === null ? row.sourceCitation : `${row.lab ?? row.sourceCitation}, ${row.specimen}`, structureMassG, neurons, neuronsError, cells });
     }

@@ -22,6 +22,8 @@ export interface Viewpoint {
   submissionId: string | null;
   labId: string | null;
   demonstrationLab: boolean;
+  /** Whether the checks may speak of the whole working set, as for reviewers; else of what is published and of the own laboratory. */
+  seesWorkingSet: boolean;
   /** Rows whose lines the entries are placed on: those of the current version, or the working set for reviewers. Null places nothing. */
   placing: PlacingSet | null;
 }
@@ -63,14 +65,15 @@ async function checkContextOf(db: Queryable, content: SubmissionContent, vocabul
   const { today, submissionId, labId } = viewpoint;
   if (content.kind === 'literature') return { today };
   const taxon = vocabulary.taxa.get(taxonSlugsOf(content)[0] ?? '');
-  const held = taxon === undefined ? [] : await findRowsOfTaxon(db, taxon.id, submissionId, today);
+  const scope = { exceptSubmissionId: submissionId, day: today, workingOf: viewpoint.seesWorkingSet ? ('all' as const) : { labId } };
+  const held = taxon === undefined ? [] : await findRowsOfTaxon(db, taxon.id, scope);
   const parts: Record<string, string[]> = {};
   for (const { key, parentKey } of vocabulary.structures.values()) if (parentKey !== null) parts[parentKey] = [...(parts[parentKey] ?? []), key];
   return {
     today,
     otherSpecimens: held.flatMap(({ row }) => (row.specimen === null ? [] : [{ code: row.specimen, structure: row.structure, neurons: row.neurons }])),
     labSpecimenCodes: labId === null ? [] : await findSpecimenCodes(db, labId, submissionId),
-    delineations: await findDelineations(db, structureKeysOf(content), submissionId),
+    delineations: await findDelineations(db, structureKeysOf(content), scope),
     parts,
   };
 }

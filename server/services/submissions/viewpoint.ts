@@ -18,6 +18,7 @@ export async function contributorView(context: Context, db: Queryable, actor: Pi
     submissionId: subject?.id ?? null,
     labId,
     demonstrationLab: subject?.labDemonstration ?? (labId === null ? false : await findLabDemonstration(db, labId)),
+    seesWorkingSet: false,
     placing: current === null ? null : { rows: await loadVersionRows(db, current) },
   };
 }
@@ -25,5 +26,5 @@ export async function contributorView(context: Context, db: Queryable, actor: Pi
 /** The point from which a reviewer looks: the lines of the working set. */
 export async function reviewerView(context: Context, db: Queryable, submission: SubmissionRow): Promise<Viewpoint> {
   const rows = await loadWorkingRows(db, { today: today(context) });
-  return { today: today(context), submissionId: submission.id, labId: submission.labId, demonstrationLab: submission.labDemonstration ?? false, placing: { rows } };
+  return { today: today(context), submissionId: submission.id, labId: submission.labId, demonstrationLab: submission.labDemonstration ?? false, seesWorkingSet: true, placing: { rows } };
 }
