@@ -1,9 +1,9 @@
 import { View } from 'react-native';
-import type { CheckResult } from '../../shared/contracts/checks';
 import { formatInterval, formatQuantity, type QuantityKind } from '../../shared/domain/quantityText';
 import type { Quantity as Estimated } from '../../shared/domain/quantity';
 import type { SampleEstimate } from '../../shared/domain/sampleTypes';
-import { CheckList, type CheckRow } from '../marks/CheckList';
+import { CheckList } from '../marks/CheckList';
+import { checkRows } from '../marks/checkRows';
 import { Quantity } from '../marks/Quantity';
 import type { QuantityName } from '../theme/tokens';
 import { KeyValueRows, type KeyValue } from '../ui/KeyValueRows';
@@ -115,25 +115,4 @@ function Aliquots({ estimate, bench }: { estimate: SampleEstimate; bench: Bench 
       </View>
     </Section>
   );
-}
-
-/** Names of the checks a sample meets, in the words of the bench. */
-const names: Readonly<Record<string, string>> = {
-  'aliquot-cv': 'CV between aliquots',
-  'few-aliquots': 'aliquots counted',
-  'excess-cv': 'CV beyond counting error',
-  'dispersion-too-small': 'aliquots alike',
-  'nuclei-per-square': 'nuclei per square',
-  'volume-of-one-square': 'counted volume and squares',
-  'few-neun-nuclei': 'nuclei scored for NeuN',
-  'neun-fields-disagree': 'NeuN fields agree',
-  'neun-near-the-ends': 'NeuN-positive fraction',
-};
-
-const order = { blocks: 0, warns: 1, passes: 2 } as const;
-
-function checkRows(checks: readonly CheckResult[]): CheckRow[] {
-  return [...checks]
-    .sort((a, b) => order[a.level] - order[b.level])
-    .map(({ code, path, level, figure, limit, message }, index) => ({ key: `${code} ${path} ${index}`, level, name: names[code] ?? code.replaceAll('-', ' '), figure: figure ?? undefined, limit: limit ?? undefined, sentence: level === 'passes' ? undefined : message }));
 }

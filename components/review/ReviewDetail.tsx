@@ -13,7 +13,7 @@ import { BackLink } from '../ui/TextLink';
 import { Button } from '../ui/Button';
 import { Section } from '../ui/Section';
 import { Text } from '../ui/Text';
-import { checkRows } from './checkRows';
+import { checkRows } from '../marks/checkRows';
 import { CommentSheet } from './CommentSheet';
 import { DecisionSheet } from './DecisionSheet';
 import { Evidence } from './Evidence';

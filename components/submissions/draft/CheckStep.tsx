@@ -6,7 +6,7 @@ import { explanationKey, unexplainedWarnings } from '../../../shared/domain/chec
 import { fieldName } from '../../../shared/domain/fieldNames';
 import { useBreakpoint } from '../../layout/useBreakpoint';
 import { CheckList } from '../../marks/CheckList';
-import { checkName, checkRows } from '../../marks/checkRows';
+import { checkRows } from '../../marks/checkRows';
 import { PlacesOfSubmission } from '../../review/PlacesOfSubmission';
 import { useTheme } from '../../theme/ThemeProvider';
 import { Button } from '../../ui/Button';
@@ -90,7 +90,7 @@ function Finding({ check, content, onReach, word, onWord }: FindingProps) {
   const name = fieldName(check.path, content);
   const unsaid = onWord !== undefined && (word ?? '').trim() === '';
   return (
-    <View role="group" aria-label={`${checkName(check.code)} at ${name}`} style={{ flexDirection: 'row', gap: 10, paddingVertical: 8, borderBottomWidth: 1, borderBottomColor: colour.hairline }}>
+    <View role="group" aria-label={`${check.code.replaceAll('-', ' ')} at ${name}`} style={{ flexDirection: 'row', gap: 10, paddingVertical: 8, borderBottomWidth: 1, borderBottomColor: colour.hairline }}>
       <View style={{ paddingTop: 6 }}>
         <Sign name={check.level === 'blocks' ? 'cross' : 'ring'} tone="flagged" />
       </View>

@@ -1,20 +1,16 @@
 import type { CheckResult } from '../../../shared/contracts/checks';
+import { unexplainedWarnings } from '../../../shared/domain/checks/outcome';
 import { AppError } from '../../errors';
-
-/** A contributor's word on a doubtful check stands under code and path, or under the code for all of its kind. */
-function isExplained(check: CheckResult, explanations: Readonly<Record<string, string>>): boolean {
-  return [`${check.code}:${check.path}`, `${check.code}@${check.path}`, check.code].some((key) => Object.hasOwn(explanations, key) && (explanations[key] ?? '').trim() !== '');
-}
 
 /**
  * Refuses what cannot be submitted: everything impossible, and every doubtful value without a word on it.
  *
- * @param explanations texts by `<code>@<path>`, `<code>:<path>` or `<code>`
+ * @param explanations texts by `<code>@<path>`, or by `<code>` for all checks of a kind
  * @throws checks-block with one error per finding
  */
 export function refuseUnlessSound(checks: readonly CheckResult[], explanations: Readonly<Record<string, string>>): void {
   const blocking = checks.filter((check) => check.level === 'blocks');
-  const silent = checks.filter((check) => check.level === 'warns' && !isExplained(check, explanations));
+  const silent = unexplainedWarnings(checks, explanations);
   if (blocking.length + silent.length === 0) return;
   const found = (check: CheckResult) => (check.figure === null ? '' : `; found ${check.figure}${check.limit === null ? '' : `, expected ${check.limit}`}`);
   const errors = [

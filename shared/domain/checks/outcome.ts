@@ -22,17 +22,23 @@ export function shortFigure(value: number): string {
   return Math.abs(value) >= 1000 ? String(Math.round(value)) : String(Number(value.toPrecision(3)));
 }
 
-/** Key under which a contributor's word on a check is kept: code and field path. */
+/** Key under which a contributor's word on a check is kept: code and field path, `few-aliquots@structures.0.samples.0.aliquots`. */
 export function explanationKey(check: Pick<CheckResult, 'code' | 'path'>): string {
-  return `${check.code}:${check.path}`;
+  return `${check.code}@${check.path}`;
 }
 
 /**
- * The doubtful checks that still lack a word. `explanations` holds texts by `explanationKey`.
- * An explanation of blanks is none.
+ * A contributor's word on a check, or null. `explanations` holds texts by `explanationKey`, or by the code alone for
+ * every check of that kind. A word of blanks is none.
  */
+export function wordOnCheck(check: Pick<CheckResult, 'code' | 'path'>, explanations: Readonly<Record<string, string>>): string | null {
+  const held = [explanationKey(check), check.code].map((key) => (Object.hasOwn(explanations, key) ? (explanations[key] ?? '').trim() : ''));
+  return held.find((text) => text !== '') ?? null;
+}
+
+/** The doubtful checks that still lack a word, see `wordOnCheck`. */
 export function unexplainedWarnings(checks: readonly CheckResult[], explanations: Readonly<Record<string, string>>): CheckResult[] {
-  return checks.filter((check) => check.level === 'warns' && (explanations[explanationKey(check)] ?? '').trim() === '');
+  return checks.filter((check) => check.level === 'warns' && wordOnCheck(check, explanations) === null);
 }
 
 /** Whether anything impossible was found: then the content cannot be submitted. */
