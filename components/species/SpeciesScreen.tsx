@@ -2,6 +2,7 @@ import { router, type Href } from 'expo-router';
 import { useEffect, useState } from 'react';
 import { View } from 'react-native';
 import type { SpeciesPage } from '../../shared/contracts/register';
+import { isGenusLevel } from '../../shared/domain/identifiers';
 import { Screen } from '../layout/Screen';
 import { useBreakpoint } from '../layout/useBreakpoint';
 import { CladeMark } from '../marks/CladeMark';
@@ -72,7 +73,7 @@ function SpeciesView({ page }: { page: SpeciesPage }) {
           ))}
         </Row>
         {page.synonyms.length > 0 ? <Text size="secondary" tone="inkSoft">{`also entered as ${page.synonyms.join(', ')}`}</Text> : null}
-        {page.named ? null : <Text size="secondary">This name is kept at genus level: it enters no fit.</Text>}
+        {isGenusLevel(page.species) ? <Text size="secondary">This name is kept at genus level: it enters fits with a mark.</Text> : page.named ? null : <Text size="secondary">The species is not named: it enters no fit.</Text>}
       </Section>
       <Section title="Sources" look="small">
         {page.sources.map((source) => (

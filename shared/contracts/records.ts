@@ -34,7 +34,7 @@ export const recordRowSchema = z.object({
   species: z.string(),
   nameAsEntered: z.string(),
   qualifier: z.string(),
-  /** False for names kept at genus level or that fit several species: such a row enters no fit. */
+  /** False for a species without a full name: kept at genus level ("Genus sp.") it enters fits with a mark, else none. */
   named: z.boolean(),
   /** Names from the root to the parent of the species. */
   lineage: z.array(z.string()),

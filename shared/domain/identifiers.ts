@@ -57,3 +57,9 @@ export function recordSerial(text: string): number | null {
   const serial = Number(match?.[1]);
   return match !== null && serial > 0 ? serial : null;
 }
+
+/**
+ * Whether a name is kept at genus level ("Cynomys sp."): it stands for one species that nobody named and enters fits
+ * with a mark; a name that fits several species never does.
+ */
+export const isGenusLevel = (name: string): boolean => name.endsWith(' sp.');

@@ -1,5 +1,6 @@
 import type { RecordRow } from '../../../shared/contracts/records';
 import type { LeftOut, MeanInput, PairQuestion, SetAsideScope as MeanScope, SpeciesMean } from '../../../shared/domain/meanInput';
+import { isGenusLevel } from '../../../shared/domain/identifiers';
 import { formSpeciesMeans } from '../../../shared/domain/speciesMean';
 import type { Question } from './questions';
 import type { DatasetRow } from './rows';
@@ -46,16 +47,16 @@ function specimenKey(row: RecordRow): string | null {
   return [row.specimen ?? row.number, ...row.pooledWith].sort().join(' + ');
 }
 
-/** A name kept at genus level stands for one species that nobody named: it enters fits, marked; a name that fits several species never does. */
-const isGenusLevel = (row: RecordRow): boolean => row.qualifier === 'sp.' || row.species.endsWith(' sp.');
+
+const isMarkedGenusLevel = (row: RecordRow): boolean => row.qualifier === 'sp.' || isGenusLevel(row.species);
 
 function toMeanInput(row: RecordRow): MeanInput {
   return {
     recordNumber: row.number,
     taxonSlug: row.taxonSlug,
     // What enters no mean is known to formSpeciesMeans by an empty name.
-    speciesName: row.named || isGenusLevel(row) ? row.species : '',
-    marks: { domestic: row.origin === 'domestic', strain: row.origin === 'strain', hybrid: row.qualifier === 'hybrid', genusLevel: isGenusLevel(row), demonstration: row.demonstration },
+    speciesName: row.named || isMarkedGenusLevel(row) ? row.species : '',
+    marks: { domestic: row.origin === 'domestic', strain: row.origin === 'strain', hybrid: row.qualifier === 'hybrid', genusLevel: isMarkedGenusLevel(row), demonstration: row.demonstration },
     sourceKey: row.sourceKey,
     sourceKind: row.kind,
     specimenKey: specimenKey(row),
