@@ -68,7 +68,7 @@ describe('GET /records/:number', () => {
     expect(body.setAside).toHaveLength(1);
     expect(body.setAside[0]?.reason).not.toBe('');
     const trail = body.trail.map(({ what }) => what);
-    expect(trail).toEqual(['revision 1 submitted', 'revision 1 approved', 'set aside from structureMassG of cerebral_cortex with neurons of cerebral_cortex', 'frozen in version 1']);
+    expect(trail).toEqual(['revision 1 submitted', 'revision 1 approved', 'set aside from fits of mass of the cerebral cortex and neurons of the cerebral cortex', 'frozen in version 1']);
     expect(body.trail.at(-1)).toMatchObject({ current: true });
     expect(body.places[0]).toMatchObject({ clade: 'rodentia', n: 9, inside: false });
   });

@@ -54,6 +54,14 @@ describe('GET /scaling on version 1', () => {
     expect(answer.species.find(({ slug }) => slug === 'cynomys-sp')?.marks).toContain('name at genus level');
   });
 
+  it('speaks of a brain whose parts are not specified in words, and of a falling exponent with a minus sign', async () => {
+    const [brain] = (await ask('x=bodyMassG&y=structureMassG&yStructure=brain_not_specified&clades=rodentia')).sentences;
+    expect(brain?.text).toMatch(/the mass of the brain \(parts not specified\)|constant relative mass/);
+    expect(brain?.text).not.toContain('brain not specified');
+    const [density] = (await ask('x=neurons&xStructure=cerebral_cortex&y=neuronsPerMg&yStructure=cerebral_cortex&clades=rodentia')).sentences;
+    expect(density?.text).toMatch(/an exponent of −0\.\d\d \(−/);
+  });
+
   it('never pools the brain masses of two tables', async () => {
     const answer = await ask('x=bodyMassG&y=structureMassG&yStructure=brain_not_specified&clades=primates');
     const sources = new Set(answer.species.flatMap(({ contributions }) => contributions.map(({ source }) => source)));

@@ -1,3 +1,4 @@
+import type { SetAsideScope } from '../../../shared/contracts/records';
 import type { FitMethod, Variable } from '../../../shared/contracts/vocabulary';
 import type { ExponentWords } from '../../../shared/stats/sentences';
 
@@ -32,7 +33,17 @@ const variableWords: Record<Variable, string> = {
 /** Structures in the plural, as a sentence needs them. */
 const pluralWords: Record<string, string> = { cerebral_cortex: 'cortices', cerebellum: 'cerebella', rest_of_brain: 'rests of brain', olfactory_bulb: 'olfactory bulbs' };
 
-export const structureWords = (key: string): string => key.replaceAll('_', ' ');
+/** Structures whose key is no name in a sentence. */
+const namedStructures: Readonly<Record<string, string>> = { brain_not_specified: 'brain (parts not specified)' };
+
+/** Name of a structure after "the". */
+export const structureWords = (key: string): string => namedStructures[key] ?? key.replaceAll('_', ' ');
+
+/** "mass of the cerebral cortex", "neurons of the cerebellum", "body mass". */
+const axisWords = (variable: Variable, structure: string | null): string => (structure === null ? variableWords[variable] : `${variableWords[variable]} of the ${structureWords(structure)}`);
+
+/** "all fits", or the pair of variables of which a record is set aside. */
+export const scopeWords = (scope: SetAsideScope): string => (scope === 'all' ? 'all fits' : `fits of ${axisWords(scope.a.variable, scope.a.structure)} and ${axisWords(scope.b.variable, scope.b.structure)}`);
 
 const axisSlug = (variable: Variable, structure: string | null): string =>
   structure === null ? slugPart[variable] : `${slugPart[variable]}-${structure.replaceAll('_', '-')}`;
@@ -67,7 +78,7 @@ export function exponentWords({ y, yStructure, x, xStructure }: Question): Expon
   if (same && y === 'neurons' && x === 'structureMassG') return { y: 'the number of neurons', x: 'mass', growing, ratio: { name: 'density', of: 'y-per-x' } };
   if (same && y === 'cells' && x === 'structureMassG') return { y: 'the number of cells', x: 'mass', growing, ratio: { name: 'density of cells', of: 'y-per-x' } };
   if (same && y === 'otherCells' && x === 'neurons') return { y: 'the number of other cells', x: 'the neurons', growing, ratio: { name: 'other cells per neuron', of: 'y-per-x' } };
-  if (y === 'structureMassG' && x === 'bodyMassG') return { y: `${structureWords(yStructure ?? '')} mass`, x: 'body mass', growing: 'bodies', ratio: { name: 'relative mass', of: 'y-per-x' } };
+  if (y === 'structureMassG' && x === 'bodyMassG') return { y: `the mass of the ${structureWords(yStructure ?? '')}`, x: 'body mass', growing: 'bodies', ratio: { name: 'relative mass', of: 'y-per-x' } };
   return null;
 }
 

@@ -2,7 +2,7 @@ import { findFrozenRowsOf, findRecheckEventsOf, findRecordRevisions, findSetAsid
 import { findDecisions, findPersonRefs, findSubmissionEvents } from '../../../db/queries/submissions';
 import type { TrailItem } from '../../../shared/contracts/register';
 import { today, type Context } from '../../context';
-import { scopeText } from '../../export/recordsFile';
+import { scopeWords } from './questions';
 
 const eventWords: Record<string, string> = { submit: 'submitted', submitted: 'submitted', withdraw: 'withdrawn', withdrawn: 'withdrawn' };
 const decisionWords: Record<string, string> = { approve: 'approved', 'request-changes': 'changes requested', decline: 'declined' };
@@ -33,9 +33,9 @@ export async function recordTrail(context: Context, record: RecordHead, shown: n
     ...events.map(({ kind, revision, actorId, reason, createdAt }) => ({ at: createdAt, what: `revision ${revision} ${eventWords[kind] ?? kind}`, who: who(actorId), why: insight ? reason : '', current: false })),
     ...decisions.map(({ kind, revision, decidedBy, comment, createdAt }) => ({ at: createdAt, what: `revision ${revision} ${decisionWords[kind] ?? kind}`, who: who(decidedBy), why: insight ? comment : '', current: false })),
     ...checks.map(({ kind, answer, actorId, text, at }) => ({ at, what: answer === null ? (recheckWords[kind] ?? kind) : `${recheckWords[kind] ?? kind}: ${answer}`, who: who(actorId), why: text, current: false })),
-    ...aside.map(({ scope, reason, by, at }) => ({ at, what: `set aside from ${scopeText(scope)}`, who: by, why: reason, current: false })),
-    ...aside.flatMap(({ scope, liftedAt, liftedBy, liftedReason }) => (liftedAt === null ? [] : [{ at: liftedAt, what: `no longer set aside from ${scopeText(scope)}`, who: liftedBy === null ? '' : who(liftedBy), why: liftedReason, current: false }])),
-    ...public_.map(({ scope, reason, by, at }) => ({ at: new Date(at), what: `set aside from ${scopeText(scope)}`, who: by, why: reason, current: false })),
+    ...aside.map(({ scope, reason, by, at }) => ({ at, what: `set aside from ${scopeWords(scope)}`, who: by, why: reason, current: false })),
+    ...aside.flatMap(({ scope, liftedAt, liftedBy, liftedReason }) => (liftedAt === null ? [] : [{ at: liftedAt, what: `no longer set aside from ${scopeWords(scope)}`, who: liftedBy === null ? '' : who(liftedBy), why: liftedReason, current: false }])),
+    ...public_.map(({ scope, reason, by, at }) => ({ at: new Date(at), what: `set aside from ${scopeWords(scope)}`, who: by, why: reason, current: false })),
     ...frozen.flatMap(({ number, frozenAt, startedBy }) => (frozenAt === null ? [] : [{ at: frozenAt, what: `frozen in version ${number}`, who: startedBy, why: '', current: number === shown }])),
     ...(insight && record.withdrawnAt !== null ? [{ at: record.withdrawnAt, what: 'record withdrawn', who: '', why: record.withdrawnReason, current: false }] : []),
   ];

@@ -1,5 +1,6 @@
 import { findStructureNames } from '../../../db/queries/species';
 import type { ScalingAnswer, ScalingFitAnswer } from '../../../shared/contracts/fits';
+import { formatExponent } from '../../../shared/domain/quantityText';
 import { fitScaling } from '../../../shared/stats/fit';
 import { unfitGroup } from '../../../shared/stats/scalingAnswer';
 import { exponentSentence } from '../../../shared/stats/sentences';
@@ -33,10 +34,10 @@ function fitClade(clade: Clade, points: readonly MeanPoint[], question: ScalingQ
 function sentenceOf(clade: Clade, fit: ScalingFitAnswer, question: ScalingQuestion): string {
   if (fit.unfit !== null || fit.exponent === null) return `${clade.name}: ${fit.unfit?.message ?? 'no line.'}`;
   const { estimate, lower, upper } = fit.exponent;
-  const range = lower === null || upper === null ? '' : ` (${lower.toFixed(2)} to ${upper.toFixed(2)})`;
+  const range = lower === null || upper === null ? '' : ` (${formatExponent(lower)} to ${formatExponent(upper)})`;
   const words = exponentWords(question);
   if (words === null || lower === null || upper === null || isMadeFromTheOther(question)) {
-    return `In ${clade.name}, ${questionTitle(question)} has an exponent of ${estimate.toFixed(2)}${range}.`;
+    return `In ${clade.name}, ${questionTitle(question)} has an exponent of ${formatExponent(estimate)}${range}.`;
   }
   const against = fit.tests.find(({ exponent }) => exponent === 1)?.p ?? null;
   return `In ${clade.name}, ${exponentSentence(words, { lower, upper }, against)}.`;
