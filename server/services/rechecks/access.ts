@@ -2,10 +2,10 @@ import { findRecheck, type findRecheckEvents, type FoundRecheck, type Questioned
 import type { Queryable } from '../../../db/client';
 import type { Actor } from '../../context';
 import { notFound } from '../../errors';
+import { isJudge } from '../submissions/access';
 
 type Events = Awaited<ReturnType<typeof findRecheckEvents>>;
 
-export const isJudge = (actor: Actor): boolean => actor.roles.includes('reviewer') || actor.roles.includes('curator');
 const isOwnLab = (actor: Actor, labId: string | null) => labId !== null && actor.labId === labId;
 
 /** A re-check as far as the person may know it: judges know every one, contributors those of their own laboratory. */

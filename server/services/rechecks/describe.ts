@@ -4,7 +4,8 @@ import type { Recheck } from '../../../shared/contracts/rechecks';
 import type { RecheckStatus } from '../../../shared/contracts/vocabulary';
 import { recordNumber } from '../../../shared/domain/identifiers';
 import { today, type Actor, type Context } from '../../context';
-import { isJudge, knowRecheck, whyNotAnswer, whyNotClose, whyNotSettled } from './access';
+import { isJudge } from '../submissions/access';
+import { knowRecheck, whyNotAnswer, whyNotClose, whyNotSettled } from './access';
 
 type Events = Awaited<ReturnType<typeof findRecheckEvents>>;
 

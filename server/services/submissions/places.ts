@@ -22,12 +22,12 @@ export interface Placed {
 
 const withoutPlace = (reason: string | null) => ({ place: null, noPlace: reason });
 
-function entriesOf(content: SubmissionContent): { path: string; taxon: string; definitionVersion: number; bodyMassG: number | null }[] {
+function entriesOf(content: SubmissionContent): { path: string; taxon: string; definitionVersion: number; bodyMassG: number | null; isSingle: boolean }[] {
   if (content.kind === 'specimen') {
     const bodyMassG = parseMassG(content.specimen.bodyMass).value;
-    return content.structures.map(({ definitionVersion }, i) => ({ path: `structures.${i}`, taxon: content.specimen.taxon, definitionVersion, bodyMassG }));
+    return content.structures.map(({ definitionVersion, samples }, i) => ({ path: `structures.${i}`, taxon: content.specimen.taxon, definitionVersion, bodyMassG, isSingle: samples.every(({ pooledWith }) => pooledWith.every((code) => code.trim() === '')) }));
   }
-  return content.values.map((entry, i) => ({ path: `values.${i}`, taxon: entry.taxon, definitionVersion: entry.definitionVersion, bodyMassG: readLiteratureValue(entry, '').bodyMassG.value }));
+  return content.values.map((entry, i) => ({ path: `values.${i}`, taxon: entry.taxon, definitionVersion: entry.definitionVersion, bodyMassG: readLiteratureValue(entry, '').bodyMassG.value, isSingle: false }));
 }
 
 /**
@@ -42,7 +42,7 @@ export function placeEntries(content: SubmissionContent, derived: readonly Omit<
   if (placing === null) return { places: entries.map(() => withoutPlace('The register has no version yet to give a line.')), lines: [] };
   if (entries.length > mostPlaced) return { places: entries.map(() => withoutPlace('A long table is not placed row by row here; each record’s page shows its place.')), lines: [] };
   const lines: LineOfEntry[] = [];
-  const places = entries.map(({ path, taxon: slug, definitionVersion, bodyMassG }, i) => {
+  const places = entries.map(({ path, taxon: slug, definitionVersion, bodyMassG, isSingle }, i) => {
     const values = derived[i];
     const taxon = vocabulary.taxa.get(slug);
     if (values === undefined || taxon === undefined) return withoutPlace('Choose the species to see its place.');
@@ -56,7 +56,7 @@ export function placeEntries(content: SubmissionContent, derived: readonly Omit<
       structureMassG,
       neurons: neurons.value,
       bodyMassG,
-      isSingleSpecimen: content.kind === 'specimen',
+      isSingleSpecimen: isSingle,
     };
     const line = lineContext(placing.rows, { ...thing, path });
     if (line !== null) lines.push(line);
