@@ -44,7 +44,7 @@ export function StructureOfSpecies({ structure, clade }: { structure: Structure;
         <View style={{ flexDirection: wide ? 'row' : 'column-reverse', gap: wide ? 32 : 8 }}>
           <View style={{ flex: wide ? 1 : undefined }}>
             <KeyValueRows rows={meanRows(structure)} />
-            {mean.errorKind ? <Text size="least" tone="inkSoft">{`± is the ${mean.errorKind}`}</Text> : null}
+            {mean.errorKind !== 'none' && mean.errorKind !== 'not-stated' ? <Text size="least" tone="inkSoft">{`± is the ${mean.errorKind}`}</Text> : null}
           </View>
           <View style={{ flex: wide ? 1 : undefined, gap: 4 }}>
             <PlaceOnLine clade={place?.clade ?? clade} place={place ? { ratio: place.ratio, lower: place.lowerRatio, upper: place.upperRatio } : null} noLineWords={noPlace ?? undefined} level={place?.level} flagged={place ? !place.inside : false} />
