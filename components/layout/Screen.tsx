@@ -64,7 +64,8 @@ export function Screen(props: ScreenProps) {
         </View>
       ) : null}
       <View role="main" id={MAIN_ID} tabIndex={-1} style={{ flex: 1, minWidth: 0, minHeight: 0, backgroundColor: onSheet && wide ? colour.sheet : colour.ground }}>
-        <ScrollView style={{ flex: 1, minHeight: 0 }} contentContainerStyle={{ paddingHorizontal: edge, paddingTop: wide ? 24 : 8, paddingBottom: 32, gap: wide ? 28 : 22, maxWidth: 1680 }}>
+        {/* Reached by Tab, so that a page of text alone scrolls by the keyboard too. */}
+        <ScrollView tabIndex={0} style={{ flex: 1, minHeight: 0 }} contentContainerStyle={{ paddingHorizontal: edge, paddingTop: wide ? 24 : 8, paddingBottom: 32, gap: wide ? 28 : 22, maxWidth: 1680 }}>
           <View style={{ gap: 2 }}>
             {hasTop ? (
               <View style={{ flexDirection: 'row', justifyContent: 'space-between', alignItems: 'center', gap: 12, minHeight: wide ? 24 : 40 }}>
