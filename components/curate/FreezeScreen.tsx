@@ -34,7 +34,10 @@ export function FreezeScreen() {
 function Freeze() {
   const [started, setStarted] = useState<string | null>(null);
   const preview = useFreezePreview();
-  const underWay = started ?? preview.data?.underWay?.label ?? null;
+  const running = preview.data?.underWay?.label ?? null;
+  // A freeze found under way is followed to its end, also after the preview has moved on to the next version.
+  if (running !== null && started === null) setStarted(running);
+  const underWay = started ?? running;
   return (
     <Screen title="Freeze a version" sub="Freezing is for ever: a version can never be changed again, in the database either." actions={<CurateLinks current="freeze" />}>
       {underWay !== null ? (

@@ -51,6 +51,9 @@ export function ReviewList({ currentId, asPanel }: { currentId?: string; asPanel
       </QueryView>
       <View style={{ padding: asPanel ? 20 : 0, paddingTop: 16 }}>
         <Hint>Submissions of your own laboratory are decided by others.</Hint>
+        <TextLink href={'/rechecks' as Href} size="secondary" style={{ paddingVertical: 10 }}>
+          Re-checks
+        </TextLink>
       </View>
     </View>
   );

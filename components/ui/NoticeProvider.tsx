@@ -12,6 +12,8 @@ interface Notices {
 
 const NoticeContext = createContext<Notices | null>(null);
 const STAYS_MS = 12_000;
+/** Room for a page's fixed row of acts, which a notice never covers. */
+const FOOT = 64;
 
 /** Holds the notices of the app and the live region that speaks them. */
 export function NoticeProvider({ children }: { children: ReactNode }) {
@@ -37,7 +39,7 @@ export function NoticeProvider({ children }: { children: ReactNode }) {
       <View
         role="status"
         aria-live="polite"
-        style={{ position: 'absolute', zIndex: 15, gap: 8, pointerEvents: 'box-none', bottom: wide ? 24 : bar.height + 12, right: wide ? 24 : 12, left: wide ? undefined : 12, width: wide ? 420 : undefined }}
+        style={{ position: 'absolute', zIndex: 15, gap: 8, pointerEvents: 'box-none', bottom: wide ? FOOT + 24 : bar.height + FOOT + 12, right: wide ? 24 : 12, left: wide ? undefined : 12, width: wide ? 420 : undefined }}
       >
         {list.map((notice) => (
           <Notice key={notice.id} {...notice} onClose={() => dismiss(notice.id)} />
