@@ -1,7 +1,10 @@
 import { and, asc, desc, eq, lt, or, sql } from 'drizzle-orm';
+import { alias } from 'drizzle-orm/pg-core';
 import type { RecheckAnswerKind, RecheckStatus } from '../../shared/contracts/vocabulary';
 import type { Queryable, Transaction } from '../client';
 import { attachments, fitResults, flags, labs, recheckEvents, rechecks, recordRevisions, records, standingFits, structures, submissionRevisions, taxa, versionRows, versions } from '../schema/index';
+
+const clades = alias(taxa, 'clades');
 
 const columns = {
   id: rechecks.id,
@@ -21,7 +24,8 @@ const columns = {
   structure: structures.name,
   flagKind: flags.kind,
   flagReasons: flags.reasons,
-  flagFit: standingFits.slug,
+  flagFit: { y: standingFits.y, yStructure: standingFits.yStructure, x: standingFits.x, xStructure: standingFits.xStructure, method: standingFits.method },
+  flagClade: clades.name,
 };
 
 const base = (db: Queryable) =>
@@ -34,7 +38,8 @@ const base = (db: Queryable) =>
     .leftJoin(labs, eq(labs.id, records.labId))
     .leftJoin(flags, eq(flags.id, rechecks.flagId))
     .leftJoin(fitResults, eq(fitResults.id, flags.fitResultId))
-    .leftJoin(standingFits, eq(standingFits.id, fitResults.standingFitId));
+    .leftJoin(standingFits, eq(standingFits.id, fitResults.standingFitId))
+    .leftJoin(clades, eq(clades.id, standingFits.cladeId));
 
 /** Re-checks, newest first, before the given place; of one lab only where `labId` is given. */
 export function findRechecks(db: Queryable, filter: { labId?: string | undefined; status?: RecheckStatus | undefined; before: { at: Date; id: string } | null; limit: number }) {

@@ -2,6 +2,7 @@ import { findRecheckEvents, findRechecks, type FoundRecheck } from '../../../db/
 import { findPersonRefs } from '../../../db/queries/submissions';
 import type { Recheck } from '../../../shared/contracts/rechecks';
 import type { RecheckStatus } from '../../../shared/contracts/vocabulary';
+import { fitTitle } from '../dataset/questions';
 import { recordNumber } from '../../../shared/domain/identifiers';
 import { today, type Actor, type Context } from '../../context';
 import { isJudge } from '../submissions/access';
@@ -29,12 +30,12 @@ async function describe(context: Context, actor: Actor, found: readonly FoundRec
   const events = await findRecheckEvents(context.db, found.map((recheck) => recheck.id));
   const people = await findPersonRefs(context.db, [...new Set([...found.map((recheck) => recheck.askedBy), ...events.map((event) => event.actorId)])], today(context));
   return found.map((recheck) => {
-    const { id, number, at, askedBy, flagKind, flagFit, flagReasons, species, slug, structure, lab, status, question, fieldPath, submissionId, demonstration } = recheck;
+    const { id, number, at, askedBy, flagKind, flagFit, flagClade, flagReasons, species, slug, structure, lab, status, question, fieldPath, submissionId, demonstration } = recheck;
     const own = events.filter((event) => event.recheckId === id);
     return {
       id, species, slug, structure, lab, status, question, fieldPath, submissionId, demonstration,
       record: recordNumber(number),
-      flag: flagKind === null ? null : `${flagKind} in ${flagFit ?? 'a standing fit'}${flagReasons === null || flagReasons.length === 0 ? '' : `: ${flagReasons.join('; ')}`}`,
+      flag: flagKind === null ? null : `${flagKind} in ${flagFit === null || flagClade === null ? 'a standing fit' : fitTitle(flagFit, flagClade, flagFit.method)}${flagReasons === null || flagReasons.length === 0 ? '' : `: ${flagReasons.join('; ')}`}`,
       askedBy: people.get(askedBy) ?? unknown(askedBy),
       at: at.toISOString(),
       events: own.map((event) => ({ kind: eventKind(event.kind), answer: event.answer, text: event.text, by: people.get(event.actorId) ?? unknown(event.actorId), at: event.at.toISOString(), submissionRevision: event.submissionRevision })),
