@@ -107,7 +107,8 @@ const table: readonly Row[] = [
   { route: 'get /freeze/preview', statuses: curatorOnly(200) },
   { route: 'get /freeze/progress', statuses: [401, 403, 403, 403, 403, 403, 403, 200, 200] },
   { route: 'post /versions', body: { note: 5 }, statuses: curatorOnly(400) },
-  { route: 'post /versions/preparing/agree', statuses: [401, 403, 403, 403, 403, 403, 403, 409, 409] },
+  // None is being prepared: the two who may agree find nothing there.
+  { route: 'post /versions/preparing/agree', statuses: [401, 403, 403, 403, 403, 403, 403, 404, 404] },
   // Audit, people, laboratories, outbox
   { route: 'get /audit', statuses: [401, 403, 403, 403, 403, 403, 403, 200, 200] },
   { route: 'get /people', statuses: administratorOnly(200) },
