@@ -1,24 +1,13 @@
 import type { Logger } from 'pino';
-import type { Role } from '../shared/contracts/vocabulary';
 import type { Database } from '../db/client';
+import type { FoundActor } from '../db/queries/people';
 import type { Config } from './config';
 import type { Mailer } from './integrations/mail';
 import type { ObjectStore } from './integrations/storage';
 import type { JobQueue } from './jobs/queue';
 
-/** The person who asks. */
-export interface Actor {
-  id: string;
-  name: string;
-  email: string;
-  emailVerified: boolean;
-  orcid: string | null;
-  roles: Role[];
-  /** Lab of today's membership. */
-  labId: string | null;
-  labName: string | null;
-  demonstration: boolean;
-}
+/** The person who asks, with the lab of today's membership. */
+export type Actor = FoundActor;
 
 /** What every service gets first: the world, wired once at the start and replaced piece by piece in tests. */
 export interface Context {

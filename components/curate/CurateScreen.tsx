@@ -5,12 +5,11 @@ import { RoleGate } from '../layout/RoleGate';
 import { Screen } from '../layout/Screen';
 import { dayText } from '../layout/timeText';
 import { useBreakpoint } from '../layout/useBreakpoint';
-import { BinomialSpan } from '../marks/Binomial';
-import { DemoMark } from '../marks/DemoMark';
 import { StateSign } from '../marks/StateSign';
 import { useWaits } from '../queries/curate';
 import { errorInWords } from '../queries/errorInWords';
 import { FlagList } from '../species/FlagList';
+import { SpeciesCell } from '../species/SpeciesCell';
 import { Button } from '../ui/Button';
 import { QueryView } from '../ui/QueryView';
 import { Section } from '../ui/Section';
@@ -47,14 +46,7 @@ const columns: TableColumn<ToFreeze>[] = [
   {
     key: 'species',
     head: 'species',
-    cell: (row) => (
-      <View>
-        <Text>
-          <BinomialSpan name={row.species} />
-        </Text>
-        {row.demonstration ? <DemoMark /> : null}
-      </View>
-    ),
+    cell: (row) => <SpeciesCell species={row.species} demonstration={row.demonstration} />,
   },
   { key: 'structure', head: 'structure', cell: (row) => <Text size="table">{row.structure.replaceAll('_', ' ')}</Text> },
   { key: 'at', head: 'approved', align: 'end', nowrap: true, cell: (row) => <Text size="table" tone="inkSoft">{dayText(row.approvedAt)}</Text> },

@@ -1,11 +1,9 @@
 import type { Href } from 'expo-router';
-import { View } from 'react-native';
 import type { Register } from '../../shared/contracts/register';
 import { dayText } from '../layout/timeText';
-import { BinomialSpan } from '../marks/Binomial';
-import { DemoMark } from '../marks/DemoMark';
 import { PlaceOnLine } from '../marks/PlaceOnLine';
 import { Quantity } from '../marks/Quantity';
+import { SpeciesCell } from '../species/SpeciesCell';
 import { Section } from '../ui/Section';
 import { Table, type TableColumn } from '../ui/Table';
 import { Text } from '../ui/Text';
@@ -17,14 +15,7 @@ const columns: TableColumn<Newest>[] = [
   {
     key: 'species',
     head: 'species',
-    cell: (row) => (
-      <View>
-        <Text>
-          <BinomialSpan name={row.species} />
-        </Text>
-        {row.demonstration ? <DemoMark /> : null}
-      </View>
-    ),
+    cell: (row) => <SpeciesCell species={row.species} demonstration={row.demonstration} />,
   },
   { key: 'structure', head: 'structure', cell: (row) => <Text size="table">{row.structure.replaceAll('_', ' ')}</Text> },
   {
