@@ -1,5 +1,7 @@
 import type { CheckResult } from '../../shared/contracts/checks';
+import type { SubmissionContent } from '../../shared/contracts/content';
 import { wordOnCheck } from '../../shared/domain/checks/outcome';
+import { fieldName } from '../../shared/domain/fieldNames';
 import type { CheckRow } from './CheckList';
 
 const order = { blocks: 0, warns: 1, passes: 2 } as const;
@@ -63,8 +65,15 @@ const names: Readonly<Record<string, string>> = {
 /** Name of a check; the code in plain words where the list has none. */
 export const checkName = (code: string): string => names[code] ?? code.replaceAll('-', ' ');
 
+/** Structure and sample that a check speaks of, where the same check stands for several: "cerebellum, sample 2". */
+function placeOf(check: CheckResult, checks: readonly CheckResult[], content: SubmissionContent | null): string {
+  const [place] = /^(structures|values)\.\d+(\.samples\.\d+)?/.exec(check.path) ?? [];
+  const repeated = checks.some((other) => other !== check && other.code === check.code && other.path !== check.path);
+  return place === undefined || !repeated ? '' : `, ${fieldName(place, content)}`;
+}
+
 /** Checks as rows of a check list: what blocks first, then what is doubtful with the contributor's word on it. */
-export function checkRows(checks: readonly CheckResult[], explanations: Readonly<Record<string, string>> = {}): CheckRow[] {
+export function checkRows(checks: readonly CheckResult[], explanations: Readonly<Record<string, string>> = {}, content: SubmissionContent | null = null): CheckRow[] {
   return [...checks]
     .sort((a, b) => order[a.level] - order[b.level])
     .map((check, index) => {
@@ -72,7 +81,7 @@ export function checkRows(checks: readonly CheckResult[], explanations: Readonly
       return {
         key: `${check.code}@${check.path}#${index}`,
         level: check.level,
-        name: checkName(check.code),
+        name: `${checkName(check.code)}${placeOf(check, checks, content)}`,
         figure: check.figure ?? undefined,
         limit: check.limit ?? undefined,
         sentence: check.level === 'passes' ? undefined : `${check.message}${word === null ? '' : ` The contributor says: “${word}”`}`,

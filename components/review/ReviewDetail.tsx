@@ -59,7 +59,7 @@ export function ReviewDetail({ view }: { view: ReviewView }) {
         </View>
         <View style={{ flex: sideBySide ? 1 : undefined, minWidth: 0, gap: 24 }}>
           <Section title="Checks" look="small">
-            <CheckList checks={checkRows(view.preview.checks, content.explanations)} />
+            <CheckList checks={checkRows(view.preview.checks, content.explanations, content)} />
           </Section>
           <Threads detail={view} />
           <ProvenanceFacts content={content} onComment={onComment} />

@@ -40,7 +40,7 @@ export function StructureReview({ content, index, derived, onComment }: Structur
             <View key={entry.samples[at]?.id ?? at} style={{ gap: 4 }}>
               <Row justify="space-between">
                 <Text size="table" weight="semibold">
-                  {`${label}${side ? `, ${sideWords[side]}` : ''}`}
+                  {side && sideWords[side] !== label ? `${label}, ${sideWords[side]}` : label}
                 </Text>
                 {onComment ? <Button kind="quiet" label="Comment" spokenLabel={`Comment on ${label} of ${name}`} onPress={() => onComment(`${path}.samples.${at}`)} /> : null}
               </Row>

@@ -59,7 +59,7 @@ export function SubmissionDetailScreen({ detail }: { detail: SubmissionDetail })
           <Records detail={detail} />
           <Decisions decisions={detail.decisions} />
           <Section title="Checks" look="small">
-            <CheckList checks={checkRows(detail.preview.checks, content.explanations)} />
+            <CheckList checks={checkRows(detail.preview.checks, content.explanations, content)} />
           </Section>
           <Threads detail={detail} />
           <ProvenanceFacts content={content} onComment={onComment} />

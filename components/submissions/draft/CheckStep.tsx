@@ -61,7 +61,7 @@ export function CheckStep({ content, preview, pending, failed, onExplain, onReac
         ) : null}
         {passes.length > 0 ? (
           <Disclosure label={`Checks that pass, ${passes.length}`}>
-            <CheckList checks={checkRows(passes)} />
+            <CheckList checks={checkRows(passes, {}, content)} />
           </Disclosure>
         ) : null}
       </View>
