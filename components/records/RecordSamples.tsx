@@ -10,7 +10,7 @@ export function RecordSamples({ samples }: Pick<RecordPage, 'samples'>) {
       {samples.map((sample, index) => (
         <View key={index} style={{ paddingVertical: 8, gap: 2 }}>
           <Text size="table" weight="semibold">
-            {`${sample.label || `sample ${index + 1}`}, ${sample.side.replaceAll('-', ' ')}`}
+            {sample.label.startsWith(sample.side) ? sample.label : `${sample.label || `sample ${index + 1}`}, ${sample.side.replaceAll('-', ' ')}`}
           </Text>
           <Text size="table">{`nuclei ${sample.aliquots.map((aliquot) => `${aliquot.nuclei}${aliquot.excluded ? ` (excluded: ${aliquot.excluded})` : ''}`).join(', ')} in ${uniqueVolumes(sample.aliquots)} µL each`}</Text>
           <Text size="secondary" tone="inkSoft">

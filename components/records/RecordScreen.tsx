@@ -105,7 +105,7 @@ function RecordView({ page }: { page: RecordPage }) {
             <TextLink href={`/species/${row.taxonSlug}` as Href} look="plain">
               <BinomialSpan name={row.species} />
             </TextLink>
-            {`, ${page.structureName}`}
+            {`, ${page.structureName.toLowerCase()}`}
             {row.specimen ? `, specimen ${row.specimen}` : ''}
           </Text>
           <StateSign {...stateOf(page)} />

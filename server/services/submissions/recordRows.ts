@@ -48,7 +48,7 @@ function scaledUpInWords(samples: readonly SampleEntry[]): string {
   const words = samples.flatMap(({ label, side, scaleUp }, i) => {
     if (scaleUp.kind === 'none') return [];
     const name = label.trim() === '' ? `sample ${i + 1}` : label.trim();
-    if (scaleUp.kind === 'other-side') return [`${name}: ${side ?? 'one'} side, × 2 for the other side`];
+    if (scaleUp.kind === 'other-side') return [`${name === `${side} side` ? name : `${name}: ${side ?? 'one'} side`}, × 2 for the other side`];
     return [`${name}: × ${scaleUp.factor.trim()} (${scaleUp.kind === 'mass-fraction' ? 'fraction of the mass' : 'series of slabs'})`];
   });
   return words.join('; ');
