@@ -18,9 +18,14 @@ export async function waitForData(page: Page): Promise<void> {
   await expect(page.locator('[aria-busy="true"]')).toHaveCount(0, { timeout: 20_000 });
 }
 
-/** The theme as a visitor has chosen it before. */
-export async function useTheme(page: Page, theme: 'brightfield' | 'darkfield'): Promise<void> {
-  await page.addInitScript((name) => localStorage.setItem('allokarya.theme', name), theme);
+/** Asks for a theme as the visitor's system does; an open page follows at once. */
+export async function askForTheme(page: Page, theme: 'brightfield' | 'darkfield'): Promise<void> {
+  await page.emulateMedia({ colorScheme: theme === 'darkfield' ? 'dark' : 'light' });
+}
+
+/** Waits until the page stands in a theme. */
+export async function expectTheme(page: Page, theme: 'brightfield' | 'darkfield'): Promise<void> {
+  await expect(page.locator(`html[data-theme="${theme}"]`)).toBeAttached();
 }
 
 /** A list of the API as the signed-in visitor sees it. */
