@@ -40,7 +40,8 @@ export default defineConfig({
   })),
   webServer: sizes.map(({ name, port }) => ({
     name,
-    command: `node scripts/serveForTests.mjs ${name} ${port}`,
+    // `exec`: the register is the runner's own child, and sees when the runner dies.
+    command: `exec node scripts/serveForTests.mjs ${name} ${port}`,
     url: `http://127.0.0.1:${port}/api/v1/health`,
     timeout: 600_000,
     reuseExistingServer: false,

@@ -25,7 +25,11 @@ function stopAll() {
   })();
   return stopping;
 }
-for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, () => void stopAll().then(() => process.exit(0), reportAndExit));
+const end = () => void stopAll().then(() => process.exit(0), reportAndExit);
+for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, end);
+// A runner that is killed says nothing; its register would hold the port and the database for the next run.
+const runner = process.ppid;
+setInterval(() => process.ppid === runner || end(), 1_000).unref();
 
 async function serve() {
   open.turn = await joinAlone(`browser-${name}`, (pid) => `Browser tests of this checkout already run (process ${pid}).`);
